@@ -1,0 +1,6 @@
+import { mergeConfig } from 'vitest/config';
+import { sharedConfig } from '../../vitest.shared.js';
+
+export default mergeConfig(sharedConfig, {
+  test: { name: 'cli', include: ['src/**/*.test.ts', 'validation/**/*.test.ts', 'test/**/*.test.ts'] },
+});
