@@ -18,7 +18,9 @@ module.exports = async function startTestDatabase() {
       if (text.includes('\n')) resolve(text.slice(0, text.indexOf('\n')));
     });
     child.once('error', reject);
-    child.once('exit', (code) => reject(new Error(`The test database did not start (code ${String(code)}).`)));
+    child.once('exit', (code) =>
+      reject(new Error(`The test database did not start (code ${String(code)}).`)),
+    );
   });
   process.env['NOONWELL_TEST_POSTGRES'] = address;
   globalThis.noonwellTestDatabase = child;
