@@ -1,0 +1,48 @@
+import process from 'node:process';
+
+/** An error whose text says all the reader needs; shown without a stack. */
+export class StartError extends Error {}
+
+/**
+ * Runs one step and says so: a line when it starts, and its result with the seconds it took. On a terminal the seconds
+ * count up in place.
+ * @template T
+ * @param {string} title what is being done, e.g. `Starting PostgreSQL`
+ * @param {(note: (text: string) => void) => Promise<T> | T} work `note` sets the few words shown behind the title at the end
+ * @returns {Promise<T>}
+ */
+export async function step(title, work) {
+  const started = performance.now();
+  const seconds = () => ((performance.now() - started) / 1000).toFixed(1);
+  const live = process.stdout.isTTY;
+  let result = '';
+  const show = (/** @type {string} */ mark) =>
+    `${mark} ${title}${result === '' ? '' : `: ${result}`}  ${seconds()} s`;
+  if (live) process.stdout.write(`… ${title}`);
+  const ticker = live ? setInterval(() => process.stdout.write(`\r\u001b[K${show('…')}`), 500) : undefined;
+  const finish = (/** @type {string} */ mark) => {
+    clearInterval(ticker);
+    process.stdout.write(`${live ? '\r\u001b[K' : ''}${show(mark)}\n`);
+  };
+  try {
+    const value = await work((text) => {
+      result = text;
+    });
+    finish('✓');
+    return value;
+  } catch (error) {
+    finish('✗');
+    throw error;
+  }
+}
+
+/**
+ * Ends the program with the error in plain words.
+ * @param {unknown} error
+ * @returns {never}
+ */
+export function fail(error) {
+  if (error instanceof StartError) process.stderr.write(`\n${error.message}\n`);
+  else process.stderr.write(`\n${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`);
+  process.exit(1);
+}
