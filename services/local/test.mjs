@@ -12,13 +12,12 @@ import { show } from './lib/exec.mjs';
 import { requireNode } from './lib/options.mjs';
 import { ensurePackages } from './lib/packages.mjs';
 import { installed, root } from './lib/paths.mjs';
-import { fail } from './lib/step.mjs';
 import { addFailure, addReport, closingLines, emptyTally } from './lib/test-results.mjs';
 import { startThrowAwayApp } from './lib/throw-away-app.mjs';
 import { typeCheck } from './lib/type-check.mjs';
 
-/** How much oftener than in a short run the tests that take a count repeat. */
-const LONG_FACTOR = '20';
+/** Repeats of each property, fuzz and soak test in a long run; in a short one each test has its own default. */
+const LONG_COUNT = '2000';
 
 const PARTS = /** @type {const} */ (['types', 'vitest', 'jest', 'e2e']);
 
@@ -40,7 +39,9 @@ function environment() {
   const weather = process.env['NOONWELL_WEATHER_DIR'] ?? (existsSync(beside) ? beside : undefined);
   return {
     ...process.env,
-    NOONWELL_TEST_COUNT: process.env['NOONWELL_TEST_COUNT'] ?? (values.long === true ? LONG_FACTOR : '1'),
+    ...(values.long === true
+      ? { NOONWELL_TEST_COUNT: process.env['NOONWELL_TEST_COUNT'] ?? LONG_COUNT }
+      : {}),
     ...(weather === undefined ? {} : { NOONWELL_WEATHER_DIR: weather }),
   };
 }
@@ -66,15 +67,8 @@ async function vitest(config, name, env) {
 /** @param {NodeJS.ProcessEnv} env */
 async function jest(env) {
   const file = join(reports, 'jest.json');
-  const code = await show(
-    process.execPath,
-    [installed('jest/bin/jest.js'), '--json', `--outputFile=${file}`, '--silent'],
-    {
-      ...env,
-      // Results also go to standard output with --json; the file is what is read.
-      NODE_OPTIONS: process.env['NODE_OPTIONS'] ?? '',
-    },
-  );
+  const args = ['--json', `--outputFile=${file}`, '--silent'];
+  const code = await show(process.execPath, [installed('jest/bin/jest.js'), ...args], env);
   addReport(tally, 'jest', file, code);
 }
 
@@ -132,7 +126,8 @@ async function main() {
 try {
   await main();
 } catch (error) {
-  fail(error);
+  process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);
+  addFailure(tally, 'setting up the tests');
 } finally {
   rmSync(reports, { recursive: true, force: true });
 }

@@ -17,7 +17,8 @@ export async function startThrowAwayApp() {
   chmodSync(data, 0o711);
   const port = await freePort();
   const address = `http://127.0.0.1:${String(port)}`;
-  const { DATABASE_URL: _, DATABASE_OWNER_URL: __, ...env } = process.env;
+  // Never a database of somebody else's.
+  const env = { ...process.env, DATABASE_URL: undefined, DATABASE_OWNER_URL: undefined };
   const child = spawn(
     process.execPath,
     [join(root, 'services/local/start.mjs'), '--port', String(port), '--data', data],
