@@ -1,5 +1,6 @@
 const { spawn } = require('node:child_process');
 const { join } = require('node:path');
+const { createInterface } = require('node:readline');
 
 const script = join(__dirname, 'packages/persistence/test/serve-test-database.ts');
 
@@ -12,11 +13,9 @@ module.exports = async function startTestDatabase() {
     detached: true,
   });
   const address = await new Promise((resolve, reject) => {
-    let text = '';
-    child.stdout.on('data', (chunk) => {
-      text += String(chunk);
-      if (text.includes('\n')) resolve(text.slice(0, text.indexOf('\n')));
-    });
+    const lines = createInterface({ input: child.stdout });
+    // Whatever else a migration prints is not the address.
+    lines.on('line', (line) => line.startsWith('{') && resolve(line));
     child.once('error', reject);
     child.once('exit', (code) =>
       reject(new Error(`The test database did not start (code ${String(code)}).`)),
