@@ -1,1 +1,1 @@
-export {};
+export * from './weather/index.js';

@@ -1,0 +1,3 @@
+export * from './defects.js';
+export * from './epw-file.js';
+export * from './places.js';

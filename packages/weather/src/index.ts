@@ -1,0 +1,14 @@
+export * from './atmosphere.js';
+export * from './binary.js';
+export { problemOfSize } from './content.js';
+export { MONTHS, WEEKDAYS } from './calendar.js';
+export { readEpw, type EpwResult } from './epw/read.js';
+export { writeEpw, type EpwWriteOptions } from './epw/write.js';
+export * from './limits.js';
+export { describeProblem, type WeatherProblem } from './problem.js';
+export { readWeatherFile, WEATHER_READERS, type WeatherReader } from './read.js';
+export type * from './result.js';
+export { findSunOffset, type SunOffset } from './sun-offset.js';
+export { summariseWeather } from './summary.js';
+export { generateSyntheticYear } from './synthetic/generate.js';
+export { syntheticPlaceSchema, type SyntheticPlace } from './synthetic/place.js';
