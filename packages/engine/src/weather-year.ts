@@ -39,6 +39,20 @@ export const WEATHER_CHANNELS = [
 ] as const;
 export type WeatherChannel = (typeof WEATHER_CHANNELS)[number];
 
+/**
+ * Lowest and highest value of each channel that a run accepts, in the channel's unit. Readers refuse what lies
+ * outside with line and column; no irradiance at the ground, averaged over minutes or longer, reaches 2000 W/m².
+ */
+export const WEATHER_CHANNEL_RANGE = {
+  dniWm2: [0, 2000],
+  ghiWm2: [0, 2000],
+  dhiWm2: [0, 2000],
+  dryBulbC: [-90, 70],
+  windMs: [0, 120],
+  relativeHumidityPct: [0, 110],
+  pressurePa: [30_000, 120_000],
+} as const satisfies Readonly<Record<WeatherChannel, readonly [number, number]>>;
+
 /** What was done to a record when it was read. */
 export const WEATHER_FLAG = {
   filledDryBulb: 1,

@@ -16,8 +16,6 @@ interface ColumnBase {
   readonly missingFrom: number;
   /** How "missing" is written. */
   readonly missingText: string;
-  readonly low: number;
-  readonly high: number;
   /** Digits after the point when written. */
   readonly digits: number;
 }
@@ -31,10 +29,8 @@ type WhenMissing =
 export type EpwColumn = ColumnBase & WhenMissing;
 
 /**
- * Columns that make a weather year. Missing marks: the format's public data dictionary. Ranges: the
- * dictionary's for temperature and pressure; wind to 100 m/s; humidity to 110 %, over 100 taken as 100;
- * irradiance to 2000 W/m², which no hourly mean at the ground reaches (own choice: values between the
- * extraterrestrial beam and this are warned of, not refused).
+ * Columns that make a weather year, with their missing marks. Source: the format's public data dictionary.
+ * What a value may be is the engine's WEATHER_CHANNEL_RANGE; humidity over 100 % is taken as 100 %.
  */
 export const EPW_COLUMNS: readonly EpwColumn[] = [
   {
@@ -44,8 +40,6 @@ export const EPW_COLUMNS: readonly EpwColumn[] = [
     unit: '°C',
     missingFrom: 99.9,
     missingText: '99.9',
-    low: -90,
-    high: 70,
     whenMissing: 'fillShortGaps',
     filledFlag: 'filledDryBulb',
     digits: 1,
@@ -57,8 +51,6 @@ export const EPW_COLUMNS: readonly EpwColumn[] = [
     unit: '%',
     missingFrom: 999,
     missingText: '999',
-    low: 0,
-    high: 110,
     whenMissing: 'fillShortGaps',
     filledFlag: 'filledHumidity',
     digits: 0,
@@ -70,8 +62,6 @@ export const EPW_COLUMNS: readonly EpwColumn[] = [
     unit: 'Pa',
     missingFrom: 999999,
     missingText: '999999',
-    low: 31000,
-    high: 120000,
     whenMissing: 'takeFromAltitude',
     digits: 0,
   },
@@ -82,8 +72,6 @@ export const EPW_COLUMNS: readonly EpwColumn[] = [
     unit: 'Wh/m²',
     missingFrom: 9999,
     missingText: '9999',
-    low: 0,
-    high: 2000,
     whenMissing: 'refuse',
     digits: 0,
   },
@@ -94,8 +82,6 @@ export const EPW_COLUMNS: readonly EpwColumn[] = [
     unit: 'Wh/m²',
     missingFrom: 9999,
     missingText: '9999',
-    low: 0,
-    high: 2000,
     whenMissing: 'refuse',
     digits: 0,
   },
@@ -106,8 +92,6 @@ export const EPW_COLUMNS: readonly EpwColumn[] = [
     unit: 'Wh/m²',
     missingFrom: 9999,
     missingText: '9999',
-    low: 0,
-    high: 2000,
     whenMissing: 'refuse',
     digits: 0,
   },
@@ -118,8 +102,6 @@ export const EPW_COLUMNS: readonly EpwColumn[] = [
     unit: 'm/s',
     missingFrom: 999,
     missingText: '999',
-    low: 0,
-    high: 100,
     whenMissing: 'fillShortGaps',
     filledFlag: 'filledWind',
     digits: 1,

@@ -1,4 +1,4 @@
-import { WEATHER_FLAG, type WeatherChannel } from '@noonwell/engine';
+import { WEATHER_CHANNEL_RANGE, WEATHER_FLAG, type WeatherChannel } from '@noonwell/engine';
 import { isLeapYear, LEAP_YEAR_HOURS, longestMonthDays, MONTHS, slotOf } from '../calendar.js';
 import { linesOf } from '../content.js';
 import type { ProblemList } from '../problem.js';
@@ -166,7 +166,8 @@ function readValue(
   const refuse = (reason: string, fix: string) => {
     problems.add({ line, column: column.cell, columnName: column.name, value: text, reason, fix });
   };
-  const range = `${column.low} to ${column.high} ${column.unit}`;
+  const [low, high] = WEATHER_CHANNEL_RANGE[column.channel];
+  const range = `${low} to ${high} ${column.unit}`;
 
   let value = parseNumber(text);
   if (text === '' || value >= column.missingFrom) {
@@ -187,9 +188,9 @@ function readValue(
     value = 0;
     if (slot !== null) rows.flags[slot]! |= WEATHER_FLAG.clippedIrradiance;
   }
-  if (value < column.low || value > column.high) {
+  if (value < low || value > high) {
     refuse(
-      `${text} is ${value < 0 && column.low === 0 ? 'negative' : 'out of range'}.`,
+      `${text} is ${value < 0 && low === 0 ? 'negative' : 'out of range'}.`,
       fixOfRange(column, value, range),
     );
     return;
