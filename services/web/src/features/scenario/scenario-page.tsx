@@ -1,0 +1,4 @@
+/** Placeholder until the editor lands. */
+export default function ScenarioPage() {
+  return null;
+}

@@ -1,0 +1,4 @@
+/** Placeholder until the comparison lands. */
+export default function SideBySidePage() {
+  return null;
+}
