@@ -1,5 +1,8 @@
 import process from 'node:process';
 
+// A closed terminal or pipe must not end the program half-way: what was started still has to be stopped.
+process.stdout.on('error', () => undefined);
+
 /** An error whose text says all the reader needs; shown without a stack. */
 export class StartError extends Error {}
 
