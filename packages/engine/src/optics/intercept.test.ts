@@ -99,6 +99,7 @@ describe('intercept', () => {
       ['aperture diameter', { apertureDiameterM: -5 }],
       ['focal ratio', { focalRatio: 0.2 }],
       ['slope error', { slopeErrorRad: NaN }],
+      ['slope error', { slopeErrorRad: 0.11 }],
       ['sun width', { sunWidthRad: 0 }],
       ['reflectance', { reflectance: 1.01 }],
       ['shadow fraction', { shadowFraction: -0.1 }],

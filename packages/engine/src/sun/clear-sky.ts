@@ -15,7 +15,7 @@ import { kastenYoungAirMass } from './air-mass.js';
  * 13:43. Coefficients: value from memory.
  *
  * @example
- * meinelClearSkyBeamWm2(radians(90), 0) // 947.2
+ * meinelClearSkyBeamWm2(radians(30), 0) // 765.5
  */
 export function meinelClearSkyBeamWm2(elevationRad: number, altitudeM: number): number {
   requireRange('sun elevation [rad]', elevationRad, -Math.PI / 2, Math.PI / 2);

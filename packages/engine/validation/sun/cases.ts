@@ -9,6 +9,9 @@ export const REDA_ANDREAS_EXAMPLE = {
   dryBulbC: 11,
   zenithDeg: 50.11162,
   azimuthDeg: 194.34024,
+  /** Steps on the way, in the paper's table of results; value from memory. */
+  trueElevationDeg: 39.872046,
+  refractionDeg: 0.016332,
 } as const;
 
 /** Source: Kasten & Young 1989, Applied Optics 28:4735: formula's values at whole zenith angles. */

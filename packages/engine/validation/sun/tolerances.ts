@@ -2,6 +2,13 @@
 export const SUN_TOLERANCES = {
   /** The low-precision series for the sun's longitude is good to 0.01°; half of that for a single instant. */
   publishedExampleDeg: 0.005,
+  /** Pure arithmetic on the paper's own elevation; its last digit is the sixth. */
+  refractionDeg: 1e-6,
+  /**
+   * Mean error in elevation: the series errs both ways and averages out (0.000002° seen), a forgotten parallax
+   * would not (0.0017°).
+   */
+  yearElevationBiasDeg: 0.0005,
   /** Same series over a whole year: worst case, with room for the years it drifts (0.0094° seen in 2025). */
   yearSeparationDeg: 0.02,
   /**
