@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { propertyRuns } from '../../validation/property-runs.js';
 import { mixInversions } from './mix-inversions.js';
 
 function mixed(values: readonly number[]): number[] {
@@ -33,6 +34,7 @@ describe('mixInversions', () => {
         expect(Math.min(...result)).toBeGreaterThanOrEqual(Math.min(...values) - 1e-9);
         expect(Math.max(...result)).toBeLessThanOrEqual(Math.max(...values) + 1e-9);
       }),
+      propertyRuns,
     );
   });
 });

@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { propertyRuns } from '../../validation/property-runs.js';
 import { DomainError } from '../errors.js';
 import { waterDensityKgM3, waterEnthalpyJkg } from '../water/water.js';
 import {
@@ -195,6 +196,7 @@ describe('for any tank and any flows', () => {
           expect(Math.abs(io.loadNeedJ - io.heatDrawnJ - io.shortfallJ)).toBeLessThan(1e-13 * scale);
         }
       }),
+      propertyRuns,
     );
   });
 
@@ -211,6 +213,7 @@ describe('for any tank and any flows', () => {
           });
         }
       }),
+      propertyRuns,
     );
   });
 
@@ -229,6 +232,7 @@ describe('for any tank and any flows', () => {
           });
         }
       }),
+      propertyRuns,
     );
   });
 });

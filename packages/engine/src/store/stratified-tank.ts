@@ -207,9 +207,12 @@ class LayeredTank implements Tank {
   #readConditions(io: TankStep): void {
     requireRange('tank step [s]', io.dtS, 1e-6, 1e6);
     requireRange('charge flow [kg/s]', io.chargeFlowKgS, 0, 1e4);
-    requireRange('charge enthalpy rise [J/kg]', io.chargeEnthalpyRiseJkg, -1e6, 1e6);
     this.#chargeKgS = io.chargeFlowKgS;
-    this.#riseJkg = io.chargeEnthalpyRiseJkg;
+    this.#riseJkg = 0;
+    if (io.chargeFlowKgS > 0) {
+      requireRange('charge enthalpy rise [J/kg]', io.chargeEnthalpyRiseJkg, -1e6, 1e6);
+      this.#riseJkg = io.chargeEnthalpyRiseJkg;
+    }
     this.#surroundingsC = Number.isNaN(this.#roomC) ? io.surroundingsC : this.#roomC;
     requireRange('tank surroundings [°C]', this.#surroundingsC, -100, 100);
     if (this.#fixedInlet >= 0) this.#inlet = this.#fixedInlet;

@@ -50,7 +50,8 @@ function scaled(tC: number): number {
  * @returns **[J/(kg·K)]**, within 0.03 % of the source
  *
  * Source: fit to IAPWS R7-97(2012), region 1.
- * @example waterHeatCapacityJkgK(50) // 4177.7
+ * @example
+ * waterHeatCapacityJkgK(50) // 4177.7
  */
 export function waterHeatCapacityJkgK(tC: number): number {
   return heatCapacityAt(scaled(tC));
@@ -63,7 +64,8 @@ export function waterHeatCapacityJkgK(tC: number): number {
  * @returns **[J/kg]**, 0 at 0 °C, growing with tC
  *
  * Source: analytic integral of the fit to IAPWS R7-97(2012), region 1.
- * @example waterEnthalpyJkg(100) // 418800.2
+ * @example
+ * waterEnthalpyJkg(100) // 418800.2
  */
 export function waterEnthalpyJkg(tC: number): number {
   if (tC <= FIT_LOW_C) return LOW_HEAT_CAPACITY * tC;
@@ -78,7 +80,8 @@ export function waterEnthalpyJkg(tC: number): number {
  *
  * Method: a polynomial start within 1e-4 K and one Newton step, whose error is (start's error)² × c′/2c < 1e-11 K;
  * a second step takes it to the last bits.
- * @example waterTemperatureC(418800.2) // 100
+ * @example
+ * waterTemperatureC(418800.2) // 100
  */
 export function waterTemperatureC(enthalpyJkg: number): number {
   if (enthalpyJkg <= 0) return enthalpyJkg / LOW_HEAT_CAPACITY;
@@ -117,7 +120,8 @@ function temperatureStart(enthalpyJkg: number): number {
  * @returns **[kg/m³]**, within 0.01 % of the source
  *
  * Source: fit to IAPWS R7-97(2012), region 1.
- * @example waterDensityKgM3(20) // 998.6
+ * @example
+ * waterDensityKgM3(20) // 998.6
  */
 export function waterDensityKgM3(tC: number): number {
   const x = scaled(tC);
@@ -130,7 +134,8 @@ export function waterDensityKgM3(tC: number): number {
  * @returns **[Pa·s]**, within 0.03 % of the source
  *
  * Source: fit to IAPWS R12-08.
- * @example waterViscosityPas(25) // 0.00089
+ * @example
+ * waterViscosityPas(25) // 0.00089
  */
 export function waterViscosityPas(tC: number): number {
   const x = scaled(tC);
@@ -143,7 +148,8 @@ export function waterViscosityPas(tC: number): number {
  * @returns **[W/(m·K)]**, within 0.1 % of the source without its critical enhancement, which adds under 0.5 %
  *
  * Source: fit to IAPWS R15-11.
- * @example waterConductivityWmK(25) // 0.607
+ * @example
+ * waterConductivityWmK(25) // 0.607
  */
 export function waterConductivityWmK(tC: number): number {
   const x = scaled(tC);
@@ -154,7 +160,8 @@ export function waterConductivityWmK(tC: number): number {
  * Prandtl number of liquid water: heat capacity × viscosity / conductivity.
  * @param tC temperature **[°C, 0…200; the end's value beyond]**
  * @returns **[–]**
- * @example waterPrandtl(25) // 6.12
+ * @example
+ * waterPrandtl(25) // 6.127
  */
 export function waterPrandtl(tC: number): number {
   return (waterHeatCapacityJkgK(tC) * waterViscosityPas(tC)) / waterConductivityWmK(tC);
