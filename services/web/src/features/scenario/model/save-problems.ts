@@ -1,0 +1,37 @@
+import { scenarioField, type Problem } from '@noonwell/schema';
+
+export interface FieldProblem {
+  /** Path into the document; empty where no field can be named. */
+  readonly path: string;
+  readonly message: string;
+}
+
+/** What the server refused, by field of the form. */
+export function problemsByField(problem: Problem): FieldProblem[] {
+  const found = (problem.errors ?? []).map(({ path = '', reason, fix }) => ({
+    path: path.replace(/^document\./, ''),
+    message: fix === undefined ? reason : `${reason} ${fix}`,
+  }));
+  return found.length > 0 ? found : [{ path: '', message: problem.detail ?? problem.title }];
+}
+
+export interface ListedProblem extends FieldProblem {
+  readonly label: string;
+}
+
+/** Errors of the form as one flat list, in the order of the document: what the summary on top links to. */
+export function listErrors(errors: unknown, path: readonly string[] = []): ListedProblem[] {
+  if (typeof errors !== 'object' || errors === null) return [];
+  if ('message' in errors && typeof errors.message === 'string' && 'type' in errors) {
+    const joined = path.join('.');
+    return [{ path: joined, label: labelOf(joined), message: errors.message }];
+  }
+  return Object.entries(errors).flatMap(([key, child]: [string, unknown]) =>
+    key === 'ref' || key === 'root' ? [] : listErrors(child, [...path, key]),
+  );
+}
+
+function labelOf(path: string): string {
+  const field = scenarioField(path) ?? scenarioField(path.replace(/\.\d+$/, ''));
+  return field?.label ?? path;
+}
