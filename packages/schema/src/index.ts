@@ -16,4 +16,5 @@ export * from './scenario/scenario.js';
 export * from './scenario/simulation.js';
 export * from './scenario/to-machine.js';
 export * from './summary/summarise-run.js';
+export * from './summary/summary-figures.js';
 export * from './summary/summary.js';

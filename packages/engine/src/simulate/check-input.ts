@@ -12,7 +12,8 @@ export function requireWeather(weather: WeatherYear): void {
   requireRange('weather records', records, 1, 1_000_000);
   for (const channel of WEATHER_CHANNELS) {
     const values = weather[channel];
-    if (values.length !== records) throw new DomainError(`${channel} records`, values.length, String(records));
+    if (values.length !== records)
+      throw new DomainError(`${channel} records`, values.length, String(records));
     const [low, high] = WEATHER_CHANNEL_RANGE[channel];
     for (let record = 0; record < records; record++) {
       requireRange(`${channel} in weather record ${record + 1}`, values[record]!, low, high);
@@ -27,7 +28,11 @@ export function requireWeather(weather: WeatherYear): void {
 export function stepsPerRecord(machine: Machine, weather: WeatherYear): number {
   const steps = (weather.intervalMinutes * 60) / machine.stepS;
   if (!(Number.isInteger(steps) && steps >= 1 && steps <= 3600)) {
-    throw new DomainError('step [min]', machine.stepS / 60, `a whole number of steps in the weather's ${weather.intervalMinutes} min`);
+    throw new DomainError(
+      'step [min]',
+      machine.stepS / 60,
+      `a whole number of steps in the weather's ${weather.intervalMinutes} min`,
+    );
   }
   return steps;
 }

@@ -1,16 +1,394 @@
+import { recordCalendar, type RecordCalendar } from '../calendar.js';
+import { createDispatch, dispatchPower } from '../electricity/dispatch.js';
+import { siteUseW } from '../electricity/use.js';
+import { DomainError, RunError } from '../errors.js';
+import { ACCOUNT_INDEX } from '../ledger/accounts.js';
+import { RESIDUAL_LIMIT, findImbalance, findImbalances } from '../ledger/balance.js';
+import { LEDGER_INDEX } from '../ledger/lines.js';
+import type { Load } from '../load/load.js';
+import { createLoad } from '../load/registry.js';
+import { Loop } from '../loop/loop.js';
 import type { Machine } from '../machine.js';
+import { createMains } from '../mains/burch-christensen.js';
+import { MODEL_VERSION } from '../model-version.js';
+import { apertureAreaM2, rimAngleRad } from '../optics/dish.js';
+import { createReceiverStep, type Receiver } from '../receivers/receiver.js';
+import { createReceiver } from '../receivers/registry.js';
+import { createTank, createTankStep, type Tank } from '../store/stratified-tank.js';
+import { emptySunPosition, sunPosition, type SunPosition } from '../sun/position.js';
+import { spreadBeam } from '../sun/sunlit-substeps.js';
+import { TRACKER_STATES, TRACKER_STATE_INDEX } from '../tracker/states.js';
+import { createTracker, type Tracker } from '../tracker/tracker.js';
 import type { WeatherYear } from '../weather-year.js';
+import { requireWeather, stepsPerRecord } from './check-input.js';
+import { DishLedger } from './dish-ledger.js';
+import { Recorder } from './recorder.js';
 import type { RunResult } from './result.js';
 
 /** A run that goes on record by record, so that its caller can report progress and stop it. */
 export interface YearRun {
   readonly records: number;
   readonly done: number;
+  /** Energies so far [J], in the order of ACCOUNTS; what `finish` checks. */
+  readonly accountsJ: Float64Array;
   /** Runs up to so many more records. */
   advance(records: number): void;
   /** Checks the ledger and gives the result; throws a RunError while records are left or a part does not balance. */
   finish(): RunResult;
 }
 
-export declare function createYearRun(machine: Machine, weather: WeatherYear): YearRun;
-export declare function runYear(machine: Machine, weather: WeatherYear): RunResult;
+/** Runs a machine through a weather year in one go. */
+export function runYear(machine: Machine, weather: WeatherYear): RunResult {
+  const run = createYearRun(machine, weather);
+  run.advance(run.records);
+  return run.finish();
+}
+
+/**
+ * Sets a machine up for a weather year.
+ * @throws DomainError for an impossible machine, weather or step
+ */
+export function createYearRun(machine: Machine, weather: WeatherYear): YearRun {
+  return new Simulation(machine, weather);
+}
+
+const DEG = Math.PI / 180;
+/** Irradiance over which a dark record's residual is judged: a record without beam must balance as well as a sunny one [W/m²]. */
+const FULL_SUN_WM2 = 1000;
+/** Where a parked dish's face looks: straight down [rad]. */
+const PARKED_TILT_RAD = Math.PI / 2;
+
+/** Lines of the beam met in each state of the tracker, in the order of TRACKER_STATES; tracking has its own chain. */
+const STATE_LINE = TRACKER_STATES.map((state) => (state === 'tracking' ? -1 : LEDGER_INDEX[state]));
+
+class Simulation implements YearRun {
+  readonly records: number;
+  done = 0;
+
+  private readonly intervalS: number;
+  private readonly steps: number;
+  private readonly apertureM2: number;
+  private readonly calendar: RecordCalendar;
+  private readonly tracker: Tracker;
+  private readonly receiver: Receiver;
+  private readonly receiverStep = createReceiverStep();
+  private readonly dishLedger: DishLedger;
+  private readonly loop: Loop;
+  private readonly tank: Tank;
+  private readonly tankStep = createTankStep();
+  private readonly load: Load;
+  private readonly siteUseW: Float64Array;
+  private readonly dispatch = createDispatch();
+  private readonly recorder: Recorder;
+
+  private readonly suns: SunPosition[];
+  private readonly sunlit: Uint8Array;
+  private readonly stepDniWm2: Float64Array;
+  private readonly layersC: Float64Array;
+  private readonly stateSeconds = new Float64Array(TRACKER_STATES.length);
+  private readonly record = { trackingS: 0, flowKg: 0, faceC: 0, cellC: 0, outletC: 0 };
+
+  private storeFull = false;
+  private tankEnergyJ: number;
+  private pumpSeconds = 0;
+  private pipeFreezeSeconds = 0;
+  private faceMaxC = -Infinity;
+  private cellMaxC = -Infinity;
+  private tankTopMaxC = -Infinity;
+  private outletMaxC = 0;
+
+  constructor(
+    private readonly machine: Machine,
+    private readonly weather: WeatherYear,
+  ) {
+    requireWeather(weather);
+    this.records = weather.startLocalMs.length;
+    this.intervalS = weather.intervalMinutes * 60;
+    this.steps = stepsPerRecord(machine, weather);
+    this.apertureM2 = apertureAreaM2(machine.dish);
+    this.calendar = recordCalendar(weather);
+    this.tracker = createTracker(machine.tracker, weather.latitudeDeg * DEG);
+
+    const airC = weather.dryBulbC[0]!;
+    this.receiver = createReceiver(machine.receiver, machine.dish, airC);
+    this.receiverStep.faceC = airC;
+    this.dishLedger = new DishLedger(machine.dish, this.receiver.optics);
+    this.loop = new Loop(machine.loop, this.receiver, this.receiverStep, airC);
+    this.tank = createTank(machine.tank, machine.store.initialC);
+    this.tankEnergyJ = this.tank.energyJ();
+    this.load = createLoad(machine.load, this.calendar, createMains(weather));
+    this.siteUseW = siteUseW(machine.electricityUse, this.calendar, this.intervalS);
+    this.recorder = new Recorder(weather.startLocalMs, this.calendar, this.intervalS, this.tank.layers);
+
+    this.suns = Array.from({ length: this.steps }, emptySunPosition);
+    this.sunlit = new Uint8Array(this.steps);
+    this.stepDniWm2 = new Float64Array(this.steps);
+    this.layersC = new Float64Array(this.tank.layers);
+  }
+
+  get accountsJ(): Float64Array {
+    return this.recorder.yearJ;
+  }
+
+  advance(records: number): void {
+    const end = Math.min(this.records, this.done + records);
+    while (this.done < end) {
+      try {
+        this.runRecord(this.done);
+      } catch (error) {
+        if (error instanceof RunError) throw error;
+        throw new RunError('calculation', this.done, error instanceof Error ? error.message : String(error));
+      }
+      this.done++;
+    }
+  }
+
+  private runRecord(record: number): void {
+    const { weather, receiverStep, tankStep } = this;
+    const dtS = this.machine.stepS;
+    receiverStep.dtS = dtS;
+    receiverStep.airC = weather.dryBulbC[record]!;
+    receiverStep.windMs = weather.windMs[record]!;
+    receiverStep.pressurePa = weather.pressurePa[record]!;
+    tankStep.dtS = dtS;
+    tankStep.surroundingsC = weather.dryBulbC[record]!;
+    this.load.ask(record, tankStep);
+    this.placeSun(record);
+    this.beginRecord();
+
+    for (let step = 0; step < this.steps; step++) {
+      const sun = this.suns[step]!;
+      const beamW = this.stepDniWm2[step]! * this.apertureM2;
+      const state = this.collect(sun, this.stepDniWm2[step]!, beamW);
+      this.stateSeconds[state]! += dtS;
+      this.keepDish(state, beamW * dtS);
+      this.keepReceiverAndLoop();
+      this.chargeAndDraw();
+      this.usePower(this.siteUseW[record]!, state === TRACKER_STATE_INDEX.tracking);
+      this.watch(state === TRACKER_STATE_INDEX.tracking);
+    }
+    this.endRecord(record);
+  }
+
+  /** Sun and beam of each sub-step: a sunrise's beam belongs to the sunlit part of its record. */
+  private placeSun(record: number): void {
+    const { weather } = this;
+    const firstMidpointMs =
+      weather.startLocalMs[record]! - weather.utcOffsetHours * 3_600_000 + this.machine.stepS * 500;
+    for (let step = 0; step < this.steps; step++) {
+      sunPosition(
+        firstMidpointMs + step * this.machine.stepS * 1000,
+        weather.latitudeDeg * DEG,
+        weather.longitudeDeg * DEG,
+        weather.pressurePa[record]!,
+        weather.dryBulbC[record]!,
+        this.suns[step]!,
+      );
+      this.sunlit[step] = this.suns[step]!.elevationRad > 0 ? 1 : 0;
+    }
+    spreadBeam(weather.dniWm2[record]!, this.sunlit, this.stepDniWm2);
+  }
+
+  /** Decides the tracker's state and solves receiver and loop under it; commits the solution. */
+  private collect(sun: SunPosition, dniWm2: number, beamW: number): number {
+    const { loop, receiverStep, tank } = this;
+    let state = this.tracker.decide(sun, dniWm2, receiverStep.windMs, receiverStep.dtS);
+    const bottomC = tank.bottomC;
+    if (state === TRACKER_STATE_INDEX.tracking && this.topLayerFull())
+      state = TRACKER_STATE_INDEX.defocusedStoreFull;
+    if (state === TRACKER_STATE_INDEX.tracking) {
+      receiverStep.incidentW = beamW * this.dishLedger.incidentShare;
+      receiverStep.absorbedW = beamW * this.dishLedger.absorbedShare;
+      receiverStep.tiltDownRad = Math.max(0, sun.elevationRad);
+      loop.solve(bottomC);
+      if (loop.outletOverLimit) state = TRACKER_STATE_INDEX.defocusedStoreFull;
+      else if (this.receiver.overLimit(receiverStep)) state = TRACKER_STATE_INDEX.defocusedReceiverLimit;
+    }
+    if (state !== TRACKER_STATE_INDEX.tracking) {
+      receiverStep.incidentW = 0;
+      receiverStep.absorbedW = 0;
+      receiverStep.tiltDownRad = PARKED_TILT_RAD;
+      loop.solve(bottomC);
+    }
+    loop.commit();
+    return state;
+  }
+
+  private topLayerFull(): boolean {
+    const { topLimitC, topHysteresisK } = this.machine.store;
+    this.storeFull = this.tank.topC >= (this.storeFull ? topLimitC - topHysteresisK : topLimitC);
+    return this.storeFull;
+  }
+
+  private keepDish(state: number, beamJ: number): void {
+    const ledger = this.recorder.recordJ;
+    ledger[LEDGER_INDEX.beamOnAperture]! += beamJ;
+    const line = STATE_LINE[state]!;
+    if (line >= 0) ledger[line]! += beamJ;
+    else this.dishLedger.addTracking(ledger, beamJ);
+  }
+
+  private keepReceiverAndLoop(): void {
+    const ledger = this.recorder.recordJ;
+    const { receiverStep: receiver, loop } = this;
+    const dtS = receiver.dtS;
+    ledger[LEDGER_INDEX.convection]! += receiver.convectionW * dtS;
+    ledger[LEDGER_INDEX.radiation]! += receiver.radiationW * dtS;
+    ledger[LEDGER_INDEX.backLoss]! += receiver.backLossW * dtS;
+    ledger[LEDGER_INDEX.receiverStored]! += receiver.storedW * dtS;
+    ledger[LEDGER_INDEX.powerDc]! += receiver.powerDcW * dtS;
+    ledger[LEDGER_INDEX.heatToFluid]! += receiver.heatToFluidW * dtS;
+    ledger[LEDGER_INDEX.returnPipeLoss]! += loop.toReceiver.lossW * dtS;
+    ledger[LEDGER_INDEX.supplyPipeLoss]! += loop.toTank.lossW * dtS;
+    ledger[LEDGER_INDEX.loopStored]! += (loop.toReceiver.storedW + loop.toTank.storedW) * dtS;
+    ledger[LEDGER_INDEX.heatToStore]! += loop.heatToStoreW * dtS;
+  }
+
+  private chargeAndDraw(): void {
+    const ledger = this.recorder.recordJ;
+    const { tankStep: step, tank, load } = this;
+    step.chargeFlowKgS = this.loop.flowKgS;
+    step.chargeEnthalpyRiseJkg = this.loop.enthalpyRiseJkg;
+    tank.step(step);
+    load.settle(step);
+    ledger[LEDGER_INDEX.shellLoss]! += step.shellLossJ;
+    ledger[LEDGER_INDEX.heatDelivered]! += step.heatDrawnJ;
+    ledger[LEDGER_INDEX.loadHeat]! += step.loadNeedJ;
+    ledger[LEDGER_INDEX.backupHeat]! += load.backupJ;
+    ledger[LEDGER_INDEX.unmetHeat]! += load.unmetJ;
+    ledger[ACCOUNT_INDEX.boilerFuel]! += load.fuelJ;
+    const energyJ = tank.energyJ();
+    ledger[LEDGER_INDEX.storeStored]! += energyJ - this.tankEnergyJ;
+    this.tankEnergyJ = energyJ;
+  }
+
+  private usePower(siteW: number, tracking: boolean): void {
+    const ledger = this.recorder.recordJ;
+    const { dispatch, machine } = this;
+    const dtS = machine.stepS;
+    const trackerW = machine.trackerPower.standbyW + (tracking ? machine.trackerPower.movingW : 0);
+    dispatchPower(
+      this.receiverStep.powerDcW,
+      this.receiver.inverter,
+      siteW + this.loop.pumpW + trackerW,
+      dispatch,
+    );
+    ledger[LEDGER_INDEX.siteUse]! += siteW * dtS;
+    ledger[LEDGER_INDEX.pumpUse]! += this.loop.pumpW * dtS;
+    ledger[LEDGER_INDEX.trackerUse]! += trackerW * dtS;
+    ledger[LEDGER_INDEX.inverterLoss]! += dispatch.inverterLossW * dtS;
+    ledger[LEDGER_INDEX.gridImport]! += dispatch.importW * dtS;
+    ledger[LEDGER_INDEX.gridExport]! += dispatch.exportW * dtS;
+    ledger[ACCOUNT_INDEX.powerAc]! += dispatch.acW * dtS;
+    ledger[ACCOUNT_INDEX.ownUse]! += dispatch.ownUseW * dtS;
+  }
+
+  private beginRecord(): void {
+    this.record.trackingS = 0;
+    this.record.flowKg = 0;
+    this.record.faceC = -Infinity;
+    this.record.cellC = -Infinity;
+    this.record.outletC = 0;
+  }
+
+  private watch(tracking: boolean): void {
+    const { record, receiverStep: receiver, loop } = this;
+    const dtS = receiver.dtS;
+    if (tracking) record.trackingS += dtS;
+    record.flowKg += loop.flowKgS * dtS;
+    record.faceC = Math.max(record.faceC, receiver.faceC);
+    record.cellC = Math.max(record.cellC, receiver.hottestC);
+    if (loop.flowKgS > 0) {
+      record.outletC = Math.max(record.outletC, receiver.outletC);
+      this.pumpSeconds += dtS;
+    }
+    if (Math.min(loop.toReceiver.nowC, loop.toTank.nowC) < 0) this.pipeFreezeSeconds += dtS;
+  }
+
+  private endRecord(record: number): void {
+    const { recorder, weather, tank } = this;
+    this.requireBalance(record);
+    recorder.close(record);
+
+    const { states, tankLayersC } = recorder.hourly;
+    states.dniWm2[record] = weather.dniWm2[record]!;
+    states.dryBulbC[record] = weather.dryBulbC[record]!;
+    states.windMs[record] = weather.windMs[record]!;
+    states.sunElevationDeg[record] = this.suns[this.steps >> 1]!.elevationRad / DEG;
+    states.trackingShare[record] = this.record.trackingS / this.intervalS;
+    states.flowKgS[record] = this.record.flowKg / this.intervalS;
+    states.faceC[record] = this.record.faceC;
+    states.cellC[record] = this.record.cellC;
+    states.outletC[record] = this.record.outletC;
+    states.tankTopC[record] = tank.topC;
+    states.tankBottomC[record] = tank.bottomC;
+    tank.temperaturesC(this.layersC);
+    for (let layer = 0; layer < this.layersC.length; layer++)
+      tankLayersC[layer]![record] = this.layersC[layer]!;
+
+    this.faceMaxC = Math.max(this.faceMaxC, this.record.faceC);
+    this.cellMaxC = Math.max(this.cellMaxC, this.record.cellC);
+    this.outletMaxC = Math.max(this.outletMaxC, this.record.outletC);
+    this.tankTopMaxC = Math.max(this.tankTopMaxC, tank.topC);
+  }
+
+  private requireBalance(record: number): void {
+    const limitJ = RESIDUAL_LIMIT * FULL_SUN_WM2 * this.apertureM2 * this.intervalS;
+    const imbalance = findImbalance(this.recorder.recordJ, limitJ);
+    if (imbalance) {
+      throw new RunError(
+        imbalance.part,
+        record,
+        `the energy balance is off by ${imbalance.residual} J (limit ${limitJ} J)`,
+      );
+    }
+  }
+
+  finish(): RunResult {
+    if (this.done < this.records) throw new DomainError('records run', this.done, `all ${this.records}`);
+    const { weather, recorder, machine } = this;
+    const beamJ = recorder.yearJ[LEDGER_INDEX.beamOnAperture]!;
+    // A run without any beam still has to balance, so the limit never falls below one record of full sun.
+    const limitJ = RESIDUAL_LIMIT * Math.max(beamJ, FULL_SUN_WM2 * this.apertureM2 * this.intervalS);
+    const imbalances = findImbalances(recorder.yearJ, limitJ);
+    if (imbalances.length > 0) {
+      const parts = imbalances.map(({ part }) => part).join(' and ');
+      const sizes = imbalances.map(({ part, residual }) => `${part} ${residual} J`).join(', ');
+      throw new RunError(
+        parts,
+        this.records - 1,
+        `the energy balance of the whole run is off: ${sizes} (limit ${limitJ} J)`,
+      );
+    }
+    const area = this.receiver.optics.openingAreaM2;
+    return {
+      modelVersion: MODEL_VERSION,
+      stepS: machine.stepS,
+      intervalS: this.intervalS,
+      records: this.records,
+      weather: {
+        latitudeDeg: weather.latitudeDeg,
+        longitudeDeg: weather.longitudeDeg,
+        altitudeM: weather.altitudeM,
+        dniJm2: weather.dniWm2.reduce((sum, dni) => sum + dni, 0) * this.intervalS,
+        dryBulbMeanC: weather.dryBulbC.reduce((sum, airC) => sum + airC, 0) / this.records,
+      },
+      apertureAreaM2: this.apertureM2,
+      rimAngleRad: rimAngleRad(machine.dish),
+      interceptFactor: this.receiver.optics.interceptFactor,
+      geometricConcentration: this.apertureM2 / area,
+      accountsJ: Float64Array.from(recorder.yearJ),
+      monthlyAccountsJ: Float64Array.from(recorder.monthlyJ),
+      trackerSeconds: Object.fromEntries(
+        TRACKER_STATES.map((state, index) => [state, this.stateSeconds[index]!]),
+      ) as RunResult['trackerSeconds'],
+      pumpSeconds: this.pumpSeconds,
+      pipeFreezeSeconds: this.pipeFreezeSeconds,
+      faceMaxC: this.faceMaxC,
+      cellMaxC: this.receiver.hasCells ? this.cellMaxC : null,
+      tankTopMaxC: this.tankTopMaxC,
+      outletMaxC: this.outletMaxC,
+      hourly: recorder.hourly,
+    };
+  }
+}

@@ -1,0 +1,83 @@
+import { requireRange } from '../errors.js';
+import { pipeConductanceWmK } from '../heat-transfer/pipe-insulation.js';
+import { HIGHEST_C, LOWEST_C } from '../receivers/face.js';
+import { solveIncreasing, type IncreasingProblem } from '../numeric/solve-increasing.js';
+import { waterDensityKgM3, waterEnthalpyJkg, waterHeatCapacityJkgK } from '../water/water.js';
+import type { PipeSettings } from './loop.js';
+
+/** Heat capacity of copper by volume [J/(m³·K)]: 8960 kg/m³ × 385 J/(kg·K). Source: CRC Handbook, value from memory. */
+const COPPER_JM3K = 8960 * 385;
+
+/** Water in the pipe is taken at this temperature for its mass [°C]. */
+const FILLING_C = 20;
+
+/** Largest accepted residual of a pipe's balance [W]. */
+const TOLERANCE_W = 1e-7;
+
+/**
+ * One run of exposed pipe, wall and water as one mixed node, implicit in time. What it holds at night it
+ * loses, and the morning pays for it.
+ */
+export class Pipe implements IncreasingProblem {
+  /** Conductance to the air [W/K]. */
+  readonly uaWK: number;
+  private readonly waterKg: number;
+  private readonly wallJK: number;
+  private temperatureC: number;
+  private solvedC: number;
+
+  private flowKgS = 0;
+  private inletJkg = 0;
+  private airC = 0;
+  private dtS = 1;
+  private heldJ = 0;
+
+  /** Results of the last solved step. */
+  outletC = 0;
+  outletJkg = 0;
+  lossW = 0;
+  storedW = 0;
+
+  constructor(settings: PipeSettings, initialC: number) {
+    requireRange('pipe length [m]', settings.lengthM, 0, 1e5);
+    this.uaWK = settings.lengthM * pipeConductanceWmK(settings);
+    const boreAreaM2 = (Math.PI * settings.boreM ** 2) / 4;
+    const wallAreaM2 = Math.PI * settings.wallM * (settings.boreM + settings.wallM);
+    this.waterKg = waterDensityKgM3(FILLING_C) * boreAreaM2 * settings.lengthM;
+    this.wallJK = COPPER_JM3K * wallAreaM2 * settings.lengthM;
+    this.temperatureC = initialC;
+    this.solvedC = initialC;
+  }
+
+  get nowC(): number {
+    return this.temperatureC;
+  }
+
+  /** Tries one step with `flowKgS` of water entering at `inletJkg`; the pipe itself changes on `commit`. */
+  solve(flowKgS: number, inletJkg: number, airC: number, dtS: number): void {
+    this.flowKgS = flowKgS;
+    this.inletJkg = inletJkg;
+    this.airC = airC;
+    this.dtS = dtS;
+    this.heldJ = this.energyJ(this.temperatureC);
+    const capacityJkgK = waterHeatCapacityJkgK(this.temperatureC);
+    const slope = (this.waterKg * capacityJkgK + this.wallJK) / dtS + flowKgS * capacityJkgK + this.uaWK;
+    this.solvedC = solveIncreasing(this, this.solvedC, slope, LOWEST_C, HIGHEST_C, TOLERANCE_W);
+    this.outletC = this.solvedC;
+  }
+
+  residual(temperatureC: number): number {
+    this.outletJkg = waterEnthalpyJkg(temperatureC);
+    this.lossW = this.uaWK * (temperatureC - this.airC);
+    this.storedW = (this.energyJ(temperatureC) - this.heldJ) / this.dtS;
+    return this.storedW + this.lossW + this.flowKgS * (this.outletJkg - this.inletJkg);
+  }
+
+  commit(): void {
+    this.temperatureC = this.solvedC;
+  }
+
+  private energyJ(temperatureC: number): number {
+    return this.waterKg * waterEnthalpyJkg(temperatureC) + this.wallJK * temperatureC;
+  }
+}
