@@ -33,7 +33,7 @@ export async function migrateDatabase(ownerUrl: string, appRole: string): Promis
     },
   });
   try {
-    await orm.getMigrator().up();
+    await orm.migrator.up();
   } finally {
     await orm.close(true);
   }

@@ -1,4 +1,5 @@
-import { defineConfig, MikroORM, type Options } from '@mikro-orm/postgresql';
+import type { MikroORM as Orm } from '@mikro-orm/core';
+import { defineConfig, MikroORM, type Options, type PostgreSqlDriver } from '@mikro-orm/postgresql';
 import { ENTITIES } from './entities.js';
 import { QUEUE_SCHEMA } from './queue/migrate.js';
 
@@ -27,6 +28,6 @@ export function ormOptions({ databaseUrl, poolMax = 10 }: OrmSettings): Options 
   });
 }
 
-export function createOrm(settings: OrmSettings): Promise<MikroORM> {
+export function createOrm(settings: OrmSettings): Promise<Orm<PostgreSqlDriver>> {
   return MikroORM.init(ormOptions(settings));
 }

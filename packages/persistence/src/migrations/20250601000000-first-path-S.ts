@@ -209,6 +209,9 @@ create policy own_workspace on workspaces using (id = ${WORKSPACE}) with check (
 -- The sign-in page names the demo workspace before anybody is known.
 create policy demo_is_public on workspaces for select using (is_demo);
 
+-- The command that makes accounts looks a workspace up by its name.
+create policy account_command on workspaces for select using (${setting('system_task')} = 'account-command');
+
 create policy own_account on users using (id = ${USER}) with check (id = ${USER});
 create policy account_signing_in on users for select using (email = ${setting('sign_in_email')});
 create policy members_of_workspace on users for select

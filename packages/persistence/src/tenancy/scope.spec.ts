@@ -1,4 +1,5 @@
-import type { MikroORM } from '@mikro-orm/postgresql';
+import type { MikroORM } from '@mikro-orm/core';
+import type { PostgreSqlDriver } from '@mikro-orm/postgresql';
 import { createTestDatabase, type TestDatabase } from '@noonwell/testkit/postgres';
 import { randomUUID } from 'node:crypto';
 import pg from 'pg';
@@ -16,7 +17,7 @@ import {
 } from '../index.js';
 
 /** One workspace with one engineer and one study. */
-async function addTenant(orm: MikroORM, name: string) {
+async function addTenant(orm: MikroORM<PostgreSqlDriver>, name: string) {
   const ids = {
     workspaceId: randomUUID(),
     userId: randomUUID(),
@@ -43,7 +44,7 @@ async function addTenant(orm: MikroORM, name: string) {
 
 describe('row-level security through the pool of the app', () => {
   let database: TestDatabase;
-  let orm: MikroORM;
+  let orm: MikroORM<PostgreSqlDriver>;
   let raw: pg.Pool;
   let own: Awaited<ReturnType<typeof addTenant>>;
   let other: Awaited<ReturnType<typeof addTenant>>;

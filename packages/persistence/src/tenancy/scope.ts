@@ -3,9 +3,9 @@ import { WORKSPACE_FILTER } from './tenant.js';
 
 /**
  * Named rights of system work that has no workspace of its own. Each opens only what its policy names:
- * the relay the outbox, the reconciler the reading of runs.
+ * the relay the outbox, the reconciler the reading of runs, the account command the reading of workspaces.
  */
-export const SYSTEM_TASKS = ['outbox-relay', 'reconciler'] as const;
+export const SYSTEM_TASKS = ['outbox-relay', 'reconciler', 'account-command'] as const;
 export type SystemTask = (typeof SYSTEM_TASKS)[number];
 
 /** What the policies of row-level security look at; nothing set means that nothing is visible. */
