@@ -20,7 +20,11 @@ export const LEDGER_LINES = [
   { key: 'waiting', label: 'Not collected: beam under the start threshold', parts: { dish: 'out' } },
   { key: 'windStow', label: 'Not collected: stowed for wind', parts: { dish: 'out' } },
   { key: 'outOfTravel', label: "Not collected: sun outside the tracker's travel", parts: { dish: 'out' } },
-  { key: 'defocusedStoreFull', label: 'Not collected: off the sun, store full', parts: { dish: 'out' } },
+  {
+    key: 'defocusedStoreFull',
+    label: 'Not collected: off the sun, store full (or water too hot at full flow)',
+    parts: { dish: 'out' },
+  },
   {
     key: 'defocusedReceiverLimit',
     label: 'Not collected: off the sun, receiver at its temperature limit',

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { propertyRuns } from '../../validation/property-runs.js';
 import { BENCH_DISH, cellSettings } from '../../validation/receivers/machines.js';
+import { squareFluxDistribution } from '../optics/flux-map.js';
 import { CellArray, ONE_SUN_WM2, groupingFactor } from './cell-array.js';
 
 const even = cellSettings({
@@ -51,6 +52,31 @@ describe('a cell array', () => {
     expect(bare('seriesString').groupingFactor).toBeLessThan(0.05);
     expect(bare('bypassedString').groupingFactor).toBeLessThan(0.6);
     expect(bare('parallel').groupingFactor).toBe(1);
+  });
+});
+
+describe('an unevenly lit array', () => {
+  it('gives the sum of its cells, each by the written relation', () => {
+    const settings = cellSettings({ secondary: { kind: 'none' }, grouping: 'parallel' });
+    const { relativeFlux } = squareFluxDistribution(BENCH_DISH, settings.face.sideM, settings.cellsPerSide);
+    const { cell } = settings;
+    const incidentW = 9000;
+    const gain = (3.3 * 1.380649e-23 * 298.15) / (1.602176634e-19 * 3.1);
+    const summed = relativeFlux.reduce((sum, ratio) => {
+      const fluxWm2 = (incidentW / areaM2) * ratio;
+      const suns = fluxWm2 / 1000;
+      const voltage = Math.max(0, 1 + gain * Math.log(suns / cell.referenceConcentration));
+      const series = Math.max(0, 1 - (suns - cell.referenceConcentration) / cell.seriesConcentration);
+      const warmth = Math.max(
+        0,
+        1 - cell.temperatureCoefficientPerK * (70 + fluxWm2 * cell.areaResistanceM2KW - 25),
+      );
+      return (
+        sum +
+        (incidentW / relativeFlux.length) * ratio * 0.9 * cell.referenceEfficiency * voltage * series * warmth
+      );
+    }, 0);
+    expect(new CellArray(settings, BENCH_DISH).powerW(incidentW, 70) / summed).toBeCloseTo(1, 5);
   });
 });
 

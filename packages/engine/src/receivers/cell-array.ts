@@ -18,7 +18,7 @@ export const ONE_SUN_WM2 = 1000;
  * Handbook of Photovoltaic Science and Engineering, concentrator chapters; value of each field as stated in it.
  */
 export class CellArray {
-  /** Local flux over mean flux of groups of equally lit cells, and each group's share of the cells. */
+  /** Local flux over mean flux of groups of nearly equally lit cells, and each group's share of the cells. */
   private readonly ratio: Float64Array;
   private readonly lnRatio: Float64Array;
   private readonly share: Float64Array;
@@ -38,7 +38,7 @@ export class CellArray {
       secondary.kind === 'mixingDuct'
         ? evenlySpreadRatios(cellsPerSide ** 2, secondary.unevenness)
         : squareFluxDistribution(dish, face.sideM, cellsPerSide).relativeFlux;
-    const groups = groupEqual(ratios);
+    const groups = groupNearlyEqual(ratios);
     this.ratio = groups.ratio;
     this.share = groups.share;
     this.lnRatio = groups.ratio.map(Math.log);
@@ -98,16 +98,25 @@ function evenlySpreadRatios(cells: number, unevenness: number): Float64Array {
   );
 }
 
-/** Cells under the same light to a part in a thousand million count as one group: symmetry makes many. */
-function groupEqual(ratios: Float64Array): { ratio: Float64Array; share: Float64Array } {
-  const counts = new Map<number, number>();
-  for (const ratio of ratios) {
-    const key = Number(ratio.toPrecision(9));
-    if (key > 0) counts.set(key, (counts.get(key) ?? 0) + 1);
+/** Cells whose light differs by less than this share one group [1]: it moves the array's power by less than 1e-5. */
+const GROUP_SPREAD = 0.02;
+
+/** Sorts cells into groups of nearly equal light, each standing for the mean of its cells. */
+function groupNearlyEqual(ratios: Float64Array): { ratio: Float64Array; share: Float64Array } {
+  const sorted = Float64Array.from(ratios).sort();
+  const groups: { sum: number; count: number; first: number }[] = [];
+  for (const ratio of sorted) {
+    const group = groups.at(-1);
+    if (group && ratio <= group.first * (1 + GROUP_SPREAD)) {
+      group.sum += ratio;
+      group.count++;
+    } else if (ratio > 0) {
+      groups.push({ sum: ratio, count: 1, first: ratio });
+    }
   }
   return {
-    ratio: Float64Array.from(counts.keys()),
-    share: Float64Array.from(counts.values(), (count) => count / ratios.length),
+    ratio: Float64Array.from(groups, ({ sum, count }) => sum / count),
+    share: Float64Array.from(groups, ({ count }) => count / ratios.length),
   };
 }
 
