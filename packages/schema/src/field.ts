@@ -68,31 +68,6 @@ export function numberListField(meta: ListField) {
     .register(fieldRegistry, meta);
 }
 
-interface TextField {
-  label: string;
-  maxLength: number;
-  defaultValue: string;
-  help: string;
-}
-
-export function textField(meta: TextField) {
-  return (
-    z
-      .string({ error: `${meta.label} must be a text` })
-      .trim()
-      .max(meta.maxLength, { error: `${meta.label} must have at most ${meta.maxLength} characters` })
-      // PostgreSQL's jsonb cannot hold the NUL character.
-      .regex(/^[^\u0000]*$/u, { error: `${meta.label} holds a NUL character` })
-      .register(fieldRegistry, {
-        label: meta.label,
-        unit: '',
-        help: meta.help,
-        source: '',
-        defaultValue: meta.defaultValue,
-      })
-  );
-}
-
 function unitText(unit: string): string {
   return unit === '1' ? '' : unit;
 }

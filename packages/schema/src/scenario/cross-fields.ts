@@ -24,6 +24,11 @@ export function crossFieldProblems(scenario: Scenario): CrossFieldProblem[] {
       receiver.secondary.entrySideM,
     ), 'catch.receiver.secondary.entrySideM', "The duct's entry is larger than the dish: its diagonal must be less than the aperture diameter");
   }
+  if (receiver.kind === 'cell') {
+    require(receiver.inverterStandingLossFraction <=
+      1 / receiver.inverterEfficiency -
+        1, 'catch.receiver.inverterStandingLossFraction', 'The standing loss alone is more than the whole loss at the rating: lower it or the efficiency');
+  }
   require(tracker.elevationMinDeg <
     tracker.elevationMaxDeg, 'catch.tracker.elevationMaxDeg', 'The highest elevation must be above the lowest');
   require(tracker.resumeWindMs <=

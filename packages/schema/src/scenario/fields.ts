@@ -39,7 +39,7 @@ function collect(schema: z.core.$ZodType, path: string, when: ScenarioField['whe
     return [...choice, ...variants];
   }
   if (schema instanceof z.ZodObject) {
-    return Object.entries(schema.shape).flatMap(([key, child]) =>
+    return Object.entries<z.core.$ZodType>(schema.shape).flatMap(([key, child]) =>
       collect(child, path === '' ? key : `${path}.${key}`, when),
     );
   }

@@ -31,7 +31,10 @@ function defaultsOf(schema: z.core.$ZodType, chosen: ReadonlyMap<string, string>
   }
   if (schema instanceof z.ZodObject) {
     return Object.fromEntries(
-      Object.entries(schema.shape).map(([name, child]) => [name, defaultsOf(child, chosen, name)]),
+      Object.entries<z.core.$ZodType>(schema.shape).map(([name, child]) => [
+        name,
+        defaultsOf(child, chosen, name),
+      ]),
     );
   }
   if (meta) return meta.defaultValue;

@@ -93,6 +93,11 @@ describe('documents that are refused', () => {
     for (const problem of problems) expect(problem.message).not.toBe('');
   });
 
+  it('an inverter whose standing loss is more than its whole loss', () => {
+    const problems = problemsOf(changed('catch.receiver.inverterEfficiency', 1, 'cell'));
+    expect(problems.map(({ path }) => path)).toEqual(['catch.receiver.inverterStandingLossFraction']);
+  });
+
   it('an unknown field, named', () => {
     expect(
       problemsOf(changed('catch.dish.colour', 'red'))

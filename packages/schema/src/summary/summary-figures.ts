@@ -29,7 +29,7 @@ function collect(schema: z.core.$ZodType, path: string): SummaryFigure[] {
     }));
   }
   if (!(schema instanceof z.ZodObject)) return [];
-  return Object.entries(schema.shape).flatMap(([key, child]) =>
+  return Object.entries<z.core.$ZodType>(schema.shape).flatMap(([key, child]) =>
     collect(child, path === '' ? key : `${path}.${key}`),
   );
 }

@@ -9,8 +9,8 @@ function figure(unit: string, description: string) {
   return z.number().meta({ unit, description });
 }
 
-const keysOf = <Key extends string>(keys: readonly Key[]) => z.enum(keys as readonly [Key, ...Key[]]);
-const lineKeys = LEDGER_LINES.map((line) => line.key) as LedgerLine[];
+const keysOf = <const Key extends string>(keys: readonly Key[]) => z.enum(keys);
+const lineKeys = LEDGER_LINES.map((line): LedgerLine => line.key);
 const monthly = (unit: string, description: string) =>
   z
     .array(z.number())
@@ -83,6 +83,8 @@ export const runSummarySchema = z.object({
     residualOfBeam: figure('1', 'That sum over the beam on the aperture; a run above 1e-9 is an error'),
   }),
 });
+/** The summary's shape, for the written reference. */
+export const RUN_SUMMARY_SHAPE: z.ZodObject = runSummarySchema;
 export type RunSummary = z.infer<typeof runSummarySchema>;
 
 /** The one way a summary is written: the command line and the app give the same bytes for the same run. */
