@@ -1,1 +1,3 @@
-export {};
+export { runCommandLine } from './command-line.js';
+export { hourlyCsvRows, writeHourlyCsv } from './hourly-csv.js';
+export { EXIT, type ExitCode, type Surroundings } from './outcome.js';
