@@ -1,3 +1,4 @@
+export * from './columns/index.js';
 export { ENTITIES } from './entities.js';
 export { Membership } from './identity/membership.entity.js';
 export { RefreshToken } from './identity/refresh-token.entity.js';

@@ -1,8 +1,6 @@
-export {
-  chooseQueueBackend,
-  queueSettingsFrom,
-  type QueueBackend,
-  type QueueBackendName,
-  type QueueSettings,
-} from './backend.js';
-export { QUEUE_SCHEMA, migrateQueue } from './migrate.js';
+export * from './backend.js';
+export * from './channels.js';
+export * from './listen.js';
+export * from './migrate.js';
+export * from './run-claims.js';
+export * from './run-requests.js';

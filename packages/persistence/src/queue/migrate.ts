@@ -1,12 +1,12 @@
 import { runMigrations } from 'bullmq';
-import pg from 'pg';
+import type pg from 'pg';
 
 /** Schema of the queue's own tables; the data's migrations leave it alone. */
 export const QUEUE_SCHEMA = 'bullmq';
 
 /**
  * Brings the queue's tables to the present version as their owner and lets the app role use them: rows only, no
- * tables of its own. Also run where the queue lives on Redis, so that switching back needs no migration.
+ * tables of its own (so a job must carry its id; numbering jobs makes a sequence). Also run where the queue lives on Redis, so that switching back needs no migration.
  * @param client one session (not a pool) of the role that owns the database
  */
 export async function migrateQueue(client: pg.Client, appRole: string): Promise<void> {

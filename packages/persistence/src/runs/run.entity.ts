@@ -29,6 +29,8 @@ export const RunRow = defineEntity({
     attempt: p.integer().default(1),
     failure: p.text().nullable(),
     cancelRequested: p.boolean().default(false),
+    /** The worker's hold on the run while it runs; a later claim takes it over. */
+    claimToken: p.text().nullable(),
     requestedBy: p.manyToOne(User).ref(),
     createdAt: createdAtProperty(),
     startedAt: p.datetime(3).nullable(),
