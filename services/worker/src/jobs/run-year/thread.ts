@@ -1,0 +1,4 @@
+import { createYearRun } from '@noonwell/engine';
+import { serveThread } from './serve-thread';
+
+serveThread(createYearRun);
