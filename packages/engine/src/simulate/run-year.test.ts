@@ -165,6 +165,22 @@ describe('what decides the result', () => {
   });
 });
 
+describe('exposed pipe', () => {
+  it('of 4 m with 50 mm of insulation conducts away less than 1 % of the yearly heat', () => {
+    // Common practice, no source: such a pipe loses far less than a flat collector's own piping. The night's cool-down comes on top.
+    const pipe = { ...COIL_MACHINE.loop.pipe, lengthM: 4, insulationM: 0.05 };
+    const result = runYear({ ...COIL_MACHINE, loop: { ...COIL_MACHINE.loop, pipe } }, weather);
+    const { powersW } = result.hourly;
+    const whileRunning = result.hourly.states.flowKgS.reduce(
+      (sum, flow, hour) =>
+        flow > 0 ? sum + (powersW.returnPipeLoss[hour]! + powersW.supplyPipeLoss[hour]!) * 3600 : sum,
+      0,
+    );
+    expect(whileRunning).toBeGreaterThan(0);
+    expect(whileRunning).toBeLessThan(0.01 * of(result, 'heatToFluid'));
+  });
+});
+
 describe('input that is refused', () => {
   it('a step that does not divide the weather’s interval', () => {
     expect(() => createYearRun({ ...COIL_MACHINE, stepS: 420 }, weather)).toThrow(DomainError);
