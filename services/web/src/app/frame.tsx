@@ -1,10 +1,10 @@
 import { makeStyles, tokens } from '@fluentui/react-components';
 import { useEffect } from 'react';
 import { NavLink, Outlet, useLocation, useNavigate, useNavigation } from 'react-router-dom';
+import { signInAddress } from '../shared/api/return-address.js';
 import { useSession } from '../shared/api/session.js';
 import { AccountMenu } from './account-menu.js';
 import { NavigationProgress } from './navigation-progress.js';
-import { signInAddress } from './session-loaders.js';
 
 const MAIN_ID = 'main';
 

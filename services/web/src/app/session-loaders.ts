@@ -1,7 +1,6 @@
 import { redirect, type LoaderFunctionArgs } from 'react-router-dom';
+import { returnAddress, signInAddress } from '../shared/api/return-address.js';
 import { ensureSessionKnown } from '../shared/api/session.js';
-
-const HOME = '/studies';
 
 /** Finds out once whether somebody is signed in, before any page asks for data. */
 export async function loadSession(): Promise<null> {
@@ -19,18 +18,4 @@ export async function requireSignedOut({ request }: LoaderFunctionArgs): Promise
   const session = await ensureSessionKnown();
   if (session.status !== 'signedIn') return null;
   return redirect(returnAddress(new URL(request.url).searchParams));
-}
-
-/** The sign-in page with the way back to where somebody wanted to go. */
-export function signInAddress({ pathname, search }: { pathname: string; search: string }): string {
-  const wanted = `${pathname}${search}`;
-  return wanted === '/' || wanted === HOME ? '/sign-in' : `/sign-in?to=${encodeURIComponent(wanted)}`;
-}
-
-/** Where to go after signing in: only ever a page of this app, whatever a link says. */
-export function returnAddress(search: URLSearchParams): string {
-  const wanted = search.get('to');
-  if (wanted === null || !/^\/(?![/\\])/.test(wanted)) return HOME;
-  const url = new URL(wanted, window.location.origin);
-  return url.origin === window.location.origin ? `${url.pathname}${url.search}` : HOME;
 }

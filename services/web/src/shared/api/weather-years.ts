@@ -1,9 +1,12 @@
-import { pageOf, weatherYearSchema } from '@noonwell/schema';
+import { pageOf, pageQuerySchema, weatherYearSchema } from '@noonwell/schema';
 import { keepPreviousData, queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import { requestColumns } from './arrow.js';
 import { request, requestRaw } from './client.js';
 
 export const WEATHER_KEY = ['weather-years'] as const;
+
+/** The longest page that the API gives, for choosing from all years at once. */
+export const MOST_LISTED = pageQuerySchema.shape.pageSize.unwrap().maxValue ?? 50;
 
 export function weatherYearsQuery(page: number, pageSize: number) {
   return queryOptions({

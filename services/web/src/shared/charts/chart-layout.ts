@@ -55,8 +55,8 @@ export function mergeLayout(base: Partial<Layout>, own: Partial<Layout>): Partia
   return merged;
 }
 
-type AxisKey = 'xaxis' | 'yaxis' | 'xaxis2' | 'yaxis2' | 'xaxis3' | 'yaxis3';
+type AxisKey = Extract<keyof Layout, `${'x' | 'y'}axis${'' | 2 | 3 | 4 | 5 | 6 | 7 | 8 | 9}`>;
 
 function isAxis(key: string): key is AxisKey {
-  return /^[xy]axis[23]?$/.test(key);
+  return /^[xy]axis[2-9]?$/.test(key);
 }

@@ -8,7 +8,7 @@ import {
   tokens,
 } from '@fluentui/react-components';
 import type { ReactNode } from 'react';
-import { describeError } from '../api/problem.js';
+import { ApiProblem, describeError } from '../api/problem.js';
 
 const useStyles = makeStyles({
   body: { whiteSpace: 'normal', paddingBlock: '8px' },
@@ -21,14 +21,17 @@ interface ErrorStateProps {
   /** What was being done, to what: "The study list could not be loaded." */
   what: string;
   error: unknown;
+  /** Better advice than the usual one for a status of the answer. */
+  nextByStatus?: Readonly<Record<number, string>>;
   onRetry?: () => void;
   actions?: ReactNode;
 }
 
 /** What happened, to what, what to do next, and the reference into the log. */
-export function ErrorState({ what, error, onRetry, actions }: ErrorStateProps) {
+export function ErrorState({ what, error, nextByStatus, onRetry, actions }: ErrorStateProps) {
   const styles = useStyles();
-  const { title, detail, next, reference, places } = describeError(error);
+  const { title, detail, next: usualNext, reference, places } = describeError(error);
+  const next = (error instanceof ApiProblem ? nextByStatus?.[error.status] : undefined) ?? usualNext;
   return (
     <MessageBar intent="error" layout="multiline" role="alert">
       <MessageBarBody className={styles.body}>
