@@ -10,7 +10,7 @@ export interface Difference {
   readonly other: number | null;
   /** Other minus baseline, in the figure's unit; null where one of the two has no such figure. */
   readonly absolute: number | null;
-  /** Difference over the size of the baseline; null where the baseline is nothing. */
+  /** Difference over the size of the baseline; null where the baseline is nothing, or a temperature, whose zero means nothing. */
   readonly ratio: number | null;
   readonly verdict: Verdict;
 }
@@ -41,7 +41,7 @@ function difference(figure: Figure, baseline: number | null, other: number | nul
     baseline,
     other,
     absolute,
-    ratio: baseline === 0 ? null : absolute / Math.abs(baseline),
+    ratio: baseline === 0 || figure.unit === '°C' ? null : absolute / Math.abs(baseline),
     verdict: verdict(figure, baseline, other),
   };
 }

@@ -40,8 +40,10 @@ export interface FixtureChanges {
 export function comparedFixture(changes: FixtureChanges = {}): Compared {
   return {
     scenarioId: '00000000-0000-4000-8000-000000000001',
+    runId: '00000000-0000-4000-8000-0000000000c1',
     name: 'Coil',
     position: 0,
+    version: 1,
     weatherYearId: '00000000-0000-4000-8000-0000000000aa',
     weatherYearName: 'Invented desert',
     document: changes.document ?? newScenario('coil'),

@@ -1,8 +1,5 @@
-/** Columns of a run's hours, one entry a weather record, as they come off the wire. */
-export interface HourColumns {
-  readonly startLocalMs: Float64Array;
-  readonly channels: Readonly<Record<string, Float64Array>>;
-}
+/** One entry a weather record, as it comes off the wire. */
+export type Column = Float64Array | Float32Array;
 
 /** A day of the calendar, "06-21": typical years join months of different years, so the year says nothing. */
 export type CalendarDay = `${number}-${number}`;
@@ -20,7 +17,7 @@ export interface Week {
 }
 
 /** Record at which each day of the year begins; the one behind the last record closes the list. */
-export function dayStarts(startLocalMs: Float64Array): Int32Array {
+export function dayStarts(startLocalMs: Column): Int32Array {
   const starts: number[] = [];
   let day = NaN;
   for (let record = 0; record < startLocalMs.length; record++) {
@@ -32,7 +29,7 @@ export function dayStarts(startLocalMs: Float64Array): Int32Array {
 }
 
 /** The week that begins on a day, moved back where the year would end before it is over. Null for an empty year. */
-export function weekFrom(startLocalMs: Float64Array, day: CalendarDay): Week | null {
+export function weekFrom(startLocalMs: Column, day: CalendarDay): Week | null {
   const starts = dayStarts(startLocalMs);
   const days = starts.length - 1;
   if (days < 1) return null;
@@ -47,14 +44,19 @@ export function weekFrom(startLocalMs: Float64Array, day: CalendarDay): Week | n
   return weekAt(startLocalMs, starts, first);
 }
 
+/** First days that a week can be asked for: every day of the year. */
+export function daysOf(startLocalMs: Column): CalendarDay[] {
+  return Array.from(dayStarts(startLocalMs).subarray(0, -1), (record) => calendarDay(startLocalMs[record]!));
+}
+
 /** The week so many days after (or before) another, held inside the year. */
-export function weekBeside(startLocalMs: Float64Array, week: Week, days: number): Week {
+export function weekBeside(startLocalMs: Column, week: Week, days: number): Week {
   const starts = dayStarts(startLocalMs);
   return weekAt(startLocalMs, starts, starts.indexOf(week.start) + days) ?? week;
 }
 
 /** The seven days in a row with the most of a channel: the page opens there when the address names no week. */
-export function fullestWeek(startLocalMs: Float64Array, channel: Float64Array): Week | null {
+export function fullestWeek(startLocalMs: Column, channel: Column): Week | null {
   const starts = dayStarts(startLocalMs);
   let best = 0;
   let most = -Infinity;
@@ -70,7 +72,7 @@ export function fullestWeek(startLocalMs: Float64Array, channel: Float64Array): 
 }
 
 /** A view of the week's entries: nothing is copied. */
-export function weekOf(column: Float64Array, week: Week): Float64Array {
+export function weekOf(column: Column, week: Week): Column {
   return column.subarray(week.start, week.end);
 }
 
@@ -78,7 +80,7 @@ export function calendarDay(localMs: number): CalendarDay {
   return new Date(localMs).toISOString().slice(5, 10) as CalendarDay;
 }
 
-function weekAt(startLocalMs: Float64Array, starts: Int32Array, day: number): Week | null {
+function weekAt(startLocalMs: Column, starts: Int32Array, day: number): Week | null {
   const days = starts.length - 1;
   if (days < 1) return null;
   const first = Math.max(0, Math.min(day, days - DAYS_SHOWN));
