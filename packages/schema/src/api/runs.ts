@@ -29,9 +29,12 @@ export const runSchema = z.object({
 });
 export type Run = z.infer<typeof runSchema>;
 
+/** Scenarios of a study at most: so many stand side by side, and so many runs one request queues. */
+export const MOST_SCENARIOS = 6;
+
 /** Queues one run for the newest version of each named scenario (all of the study's when none is named). A result that already exists is returned, not computed again. */
 export const startRunsRequestSchema = z.strictObject({
-  scenarioIds: z.array(idSchema).min(1).max(6).optional(),
+  scenarioIds: z.array(idSchema).min(1).max(MOST_SCENARIOS).optional(),
 });
 export const startRunsResponseSchema = z.object({ runs: z.array(runSchema) });
 

@@ -73,6 +73,7 @@ export const scenarioVersionSchema = z.object({
   createdAt: instantSchema,
   createdByName: z.string(),
 });
+export type ScenarioVersionView = z.infer<typeof scenarioVersionSchema>;
 
 /** Points every scenario of a study at one weather year (a new version of each that changes). */
 export const pointStudyAtWeatherRequestSchema = z.strictObject({ weatherYearId: idSchema });
