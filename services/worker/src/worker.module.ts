@@ -4,7 +4,7 @@ import { chooseQueueBackend } from '@noonwell/persistence';
 import { RUN_YEAR_QUEUE } from '@noonwell/schema';
 import { LoggerModule } from 'nestjs-pino';
 import { DatabaseCloser, databaseProvider } from './database';
-import { RunYearProcessor } from './jobs/run-year/processor';
+import { RunYearProcessor, readQueueWith } from './jobs/run-year/processor';
 import { RunThreads, type ThreadEntry } from './jobs/run-year/threads';
 import { OutboxRelay } from './outbox/outbox-relay';
 import { Reconciler } from './reconciler/reconciler';
@@ -14,6 +14,7 @@ import { WORKER_SETTINGS, type WorkerSettings } from './settings';
 export class WorkerModule {
   /** @param thread what calculates a run, where it is not the engine's own */
   static with(settings: WorkerSettings, thread?: ThreadEntry): DynamicModule {
+    readQueueWith(settings);
     return {
       module: WorkerModule,
       imports: [

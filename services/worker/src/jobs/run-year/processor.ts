@@ -13,12 +13,10 @@ import {
 } from '@noonwell/persistence';
 import { RUN_YEAR_QUEUE, runYearJobSchema, type RunYearJob } from '@noonwell/schema';
 import { DelayedError, UnrecoverableError, type Job } from 'bullmq';
-import { workerSettings } from '../../settings';
+import type { WorkerSettings } from '../../settings';
 import { RunRefused } from './calculate-run';
 import { ProgressWriter } from './progress-writer';
 import { RunThreads } from './threads';
-
-const settings = workerSettings(process.env);
 
 /** Times that a job may be taken from a worker that died before its run counts as the reason. */
 const MOST_CRASHES = 3;
@@ -30,13 +28,6 @@ export type JobOutcome = 'stored' | 'nothing to do' | 'claim lost';
  * Takes runs from the queue: claims the row, has a thread do the arithmetic, stores the result. A run that failed
  * or was cancelled is final; anything else that goes wrong (the database is away, a thread died) is tried again.
  */
-@Processor(RUN_YEAR_QUEUE, {
-  autorun: false,
-  concurrency: settings.concurrentRuns,
-  lockDuration: settings.lockMs,
-  stalledInterval: Math.ceil(settings.lockMs / 2),
-  maxStalledCount: MOST_CRASHES,
-})
 export class RunYearProcessor extends WorkerHost implements OnApplicationBootstrap, OnModuleDestroy {
   private readonly logger = new Logger(RunYearProcessor.name);
   private readonly stopping = new AbortController();
@@ -145,4 +136,15 @@ export class RunYearProcessor extends WorkerHost implements OnApplicationBootstr
   ): Promise<Result> {
     return withWorkspace(this.orm.em, job.workspaceId, work);
   }
+}
+
+/** Ties the processor to its queue. Called instead of written as a decorator: the options come from settings. */
+export function readQueueWith(settings: WorkerSettings): void {
+  Processor(RUN_YEAR_QUEUE, {
+    autorun: false,
+    concurrency: settings.concurrentRuns,
+    lockDuration: settings.lockMs,
+    stalledInterval: Math.ceil(settings.lockMs / 2),
+    maxStalledCount: MOST_CRASHES,
+  })(RunYearProcessor);
 }

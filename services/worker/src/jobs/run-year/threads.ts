@@ -1,5 +1,5 @@
 import type { RunOutcome } from '@noonwell/persistence';
-import { extname, join } from 'node:path';
+import { join } from 'node:path';
 import { Worker, type WorkerOptions } from 'node:worker_threads';
 import { RunRefused, type RunInput } from './calculate-run';
 import type { ThreadMessage } from './serve-thread';
@@ -9,8 +9,7 @@ export interface ThreadEntry {
   readonly options?: WorkerOptions;
 }
 
-/** thread.js in the build; thread.ts where the source itself is run. */
-const RUN_THREAD: ThreadEntry = { file: join(__dirname, `thread${extname(__filename)}`) };
+const RUN_THREAD: ThreadEntry = { file: join(__dirname, 'thread.js') };
 
 /** The engine needs a few tens of megabytes; a runaway run must not take the machine down. */
 const RESOURCE_LIMITS = { maxOldGenerationSizeMb: 1024 };
