@@ -5,20 +5,18 @@ import { APP_FILTER, APP_GUARD, APP_INTERCEPTOR, APP_PIPE } from '@nestjs/core';
 import { ThrottlerModule } from '@nestjs/throttler';
 import { ormOptions } from '@noonwell/persistence';
 import { LoggerModule } from 'nestjs-pino';
-import { createZodValidationPipe, ZodSerializerInterceptor } from 'nestjs-zod';
+import { ZodSerializerInterceptor } from 'nestjs-zod';
 import { AccessGuard } from './access/access.guard';
 import { AuthModule } from './auth/auth.module';
 import { SETTINGS, type Settings } from './config/settings';
 import { throttlerOptions } from './http/limits';
 import { loggerOptions } from './http/logging';
 import { ProblemFilter } from './http/problem.filter';
+import { StrictValidationPipe } from './http/strict-validation.pipe';
 import { MembersModule } from './members/members.module';
 import { MetaModule } from './meta/meta.module';
 import { StudiesModule } from './studies/studies.module';
 import { WeatherModule } from './weather/weather.module';
-
-/** Every body, query and parameter must be declared by a schema; a forgotten one fails at its first use. */
-const StrictValidationPipe = createZodValidationPipe({ strictSchemaDeclaration: true });
 
 @Global()
 @Module({})

@@ -1,5 +1,4 @@
 import { Body, Controller, Get, HttpCode, HttpStatus, Post, Req, Res, UseGuards } from '@nestjs/common';
-import { AuthGuard } from '@nestjs/passport';
 import { ApiBearerAuth, ApiBody, ApiNoContentResponse, ApiTags } from '@nestjs/swagger';
 import {
   accessSchema,
@@ -19,6 +18,7 @@ import { InjectSettings, type Settings } from '../config/settings';
 import { LimitByAddress, LimitSignIn } from '../http/limits';
 import { unauthorized } from '../http/problem';
 import { AccountsService, type Account } from './accounts.service';
+import { PasswordGuard } from './local.strategy';
 import { clearRefreshCookie, readRefreshCookie, setRefreshCookie } from './refresh-cookie';
 import { SessionsService } from './sessions.service';
 import { SignedInAccount } from './signed-in-account';
@@ -46,7 +46,7 @@ export class AuthController {
 
   @Post('sign-in')
   @LimitSignIn()
-  @UseGuards(AuthGuard('local'))
+  @UseGuards(PasswordGuard)
   @ApiBody({ type: SignInDto })
   @ZodResponse({ status: HttpStatus.OK, type: AccessDto })
   signIn(

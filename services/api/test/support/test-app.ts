@@ -1,7 +1,6 @@
 import type { NestExpressApplication } from '@nestjs/platform-express';
 import { EntityManager } from '@mikro-orm/postgresql';
 import { createTestDatabase, type TestDatabase } from '@noonwell/testkit/postgres';
-import type { Server } from 'node:http';
 import supertest, { type Agent } from 'supertest';
 import { readSettings, type Settings } from '../../src/config/settings';
 import { createApp } from '../../src/create-app';
@@ -27,8 +26,7 @@ export async function startTestApp(change: Partial<Settings> = {}): Promise<Test
   });
   await app.listen(0, '127.0.0.1');
   const address = await app.getUrl();
-  // supertest drives Node's own server.
-  const server = app.getHttpServer() as Server;
+  const server = app.getHttpServer();
   return {
     app,
     em: app.get(EntityManager),
