@@ -9,12 +9,14 @@ import { ZodSerializerInterceptor } from 'nestjs-zod';
 import { AccessGuard } from './access/access.guard';
 import { AuthModule } from './auth/auth.module';
 import { SETTINGS, type Settings } from './config/settings';
+import { EventsModule } from './events/events.module';
 import { throttlerOptions } from './http/limits';
 import { loggerOptions } from './http/logging';
 import { ProblemFilter } from './http/problem.filter';
 import { StrictValidationPipe } from './http/strict-validation.pipe';
 import { MembersModule } from './members/members.module';
 import { MetaModule } from './meta/meta.module';
+import { RunsModule } from './runs/runs.module';
 import { StudiesModule } from './studies/studies.module';
 import { WeatherModule } from './weather/weather.module';
 
@@ -37,6 +39,8 @@ export class AppModule {
         MembersModule,
         WeatherModule,
         StudiesModule,
+        RunsModule,
+        EventsModule,
         MetaModule,
       ],
       providers: [

@@ -19,5 +19,6 @@ import { SessionsService } from './sessions.service';
   ],
   controllers: [AuthController],
   providers: [AccessTokens, AccountsService, JwtStrategy, LocalStrategy, SessionsService],
+  exports: [JwtStrategy],
 })
 export class AuthModule {}
