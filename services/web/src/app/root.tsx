@@ -7,14 +7,16 @@ import { LoadingState } from '../shared/components/loading-state.js';
 export function Root() {
   const { pathname } = useLocation();
   const arrivedAt = useRef(pathname);
-  const focus = useCallback((heading: HTMLElement | null) => {
-    // Read from the window: the page's effects run before this component's.
-    const now = window.location.pathname;
-    if (heading === null || arrivedAt.current === now) return;
-    arrivedAt.current = now;
-    heading.focus({ preventScroll: true });
-    window.scrollTo(0, 0);
-  }, []);
+  // A new function for each page: headings that stay mounted from one page to the next notice it too.
+  const focus = useCallback(
+    (heading: HTMLElement | null) => {
+      if (heading === null || arrivedAt.current === pathname) return;
+      arrivedAt.current = pathname;
+      heading.focus({ preventScroll: true });
+      window.scrollTo(0, 0);
+    },
+    [pathname],
+  );
   useEffect(() => {
     if (document.title === '') document.title = 'Noonwell';
   }, []);

@@ -77,12 +77,7 @@ export function WeatherPreviewPanel({ preview, busy, error, onAccept, onDiscard 
           </MessageBarBody>
         </MessageBar>
       )}
-      {sunOffsetMinutes !== null && (
-        <span>
-          Clock check: beam, diffuse and global light agree best with the sun {formatFixed(sunOffsetMinutes)}{' '}
-          min after the start of each record.
-        </span>
-      )}
+      {sunOffsetMinutes !== null && <span>{clockCheck(sunOffsetMinutes)}</span>}
       <MonthlyChart summary={summary} height={240} />
       {error !== null && <ErrorState what="The file was not accepted; nothing was saved." error={error} />}
       <form
@@ -109,4 +104,11 @@ export function WeatherPreviewPanel({ preview, busy, error, onAccept, onDiscard 
       </form>
     </div>
   );
+}
+
+/** Where the sun must stand for beam, diffuse and global light to agree: half an hour before an hour's end, if the clock is right. */
+function clockCheck(minutesAfterLabel: number): string {
+  const size = formatFixed(Math.abs(minutesAfterLabel));
+  const side = minutesAfterLabel < 0 ? 'before' : 'after';
+  return `Clock check: beam, diffuse and global light agree best with the sun ${size} min ${side} the time that each record carries.`;
 }

@@ -1,5 +1,5 @@
-const HOUR_MS = 3_600_000;
 const DAY_HOURS = 24;
+const DAY_MS = 86_400_000;
 
 /** A year as a grid: one row an hour of the day, one column a day, in the order of the file. */
 export interface YearMap {
@@ -25,7 +25,7 @@ export function layOutYear(startLocalMs: ArrayLike<number>, values: ArrayLike<nu
   const dayStarts: number[] = [];
   let lastDate = Number.NaN;
   for (let at = 0; at < startLocalMs.length; at += 1) {
-    const date = Math.floor(startLocalMs[at]! / (DAY_HOURS * HOUR_MS));
+    const date = Math.floor(startLocalMs[at]! / DAY_MS);
     if (date !== lastDate) dayStarts.push(startLocalMs[at]!);
     lastDate = date;
     dayOf[at] = dayStarts.length - 1;
@@ -37,8 +37,9 @@ export function layOutYear(startLocalMs: ArrayLike<number>, values: ArrayLike<nu
   const monthCounts = grid(DAY_HOURS, 12);
   for (let at = 0; at < startLocalMs.length; at += 1) {
     const start = startLocalMs[at]!;
-    const hour = Math.floor(start / HOUR_MS) % DAY_HOURS;
-    const month = new Date(start).getUTCMonth();
+    const date = new Date(start);
+    const hour = date.getUTCHours();
+    const month = date.getUTCMonth();
     sums[hour]![dayOf[at]!]! += values[at]!;
     counts[hour]![dayOf[at]!]! += 1;
     monthSums[hour]![month]! += values[at]!;

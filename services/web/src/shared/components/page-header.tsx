@@ -60,7 +60,7 @@ export function PageHeader({ title, above, below, actions }: PageHeaderProps) {
         <h1 ref={heading} tabIndex={-1} className={styles.title}>
           {title}
         </h1>
-        {below !== undefined && below !== '' && <p className={styles.below}>{below}</p>}
+        {below !== undefined && below !== '' && <div className={styles.below}>{below}</div>}
       </div>
       {actions !== undefined && <div className={styles.actions}>{actions}</div>}
     </header>
