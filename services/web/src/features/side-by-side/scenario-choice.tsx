@@ -1,8 +1,8 @@
 import { Checkbox, makeStyles, Radio, RadioGroup, tokens } from '@fluentui/react-components';
-import type { ScenarioView } from '@noonwell/schema';
+import { MOST_SCENARIOS, type ScenarioView } from '@noonwell/schema';
 import { useId } from 'react';
 import { ScenarioSwatch } from '../../shared/components/scenario-swatch.js';
-import { MAX_SCENARIOS, type ViewState } from './model/address.js';
+import type { ViewState } from './model/address.js';
 import type { Shown } from './model/shown.js';
 
 const useStyles = makeStyles({
@@ -69,7 +69,7 @@ export function ScenarioChoice({ all, shown, view, onChange }: ScenarioChoicePro
                 label={scenario.name}
                 checked={shownIds.includes(scenario.id)}
                 disabled={
-                  shownIds.includes(scenario.id) ? shownIds.length === 1 : shownIds.length >= MAX_SCENARIOS
+                  shownIds.includes(scenario.id) ? shownIds.length === 1 : shownIds.length >= MOST_SCENARIOS
                 }
                 onChange={(_, { checked }) => {
                   onChange({

@@ -32,7 +32,7 @@ describe('a scenario as typed text', () => {
   it('shows the fields of the chosen variant only', () => {
     const draft = toDraft(newScenario('coil'));
     const shown = scenarioFields()
-      .filter((field) => isShown(field, draft))
+      .filter((field) => isShown(field, (path) => draftText(draft, path)))
       .map(({ path }) => path);
     expect(shown).toContain('catch.receiver.coilUaWK');
     expect(shown).not.toContain('catch.receiver.packingFraction');

@@ -81,7 +81,15 @@ export function draftText(draft: DraftValue | undefined, path: string): string |
   return typeof at === 'string' ? at : undefined;
 }
 
-/** Whether a field's variant is the chosen one. */
-export function isShown(field: Pick<ScenarioField, 'when'>, draft: Draft): boolean {
-  return field.when.every(({ path, value }) => draftText(draft, path) === value);
+/** Whether a field's variant is the chosen one. @param chosen value of a choice by its path */
+export function isShown(
+  field: Pick<ScenarioField, 'when'>,
+  chosen: (path: string) => string | undefined,
+): boolean {
+  return field.when.every(({ path, value }) => chosen(path) === value);
 }
+
+/** Choices that other fields depend on. */
+export const DECIDING_PATHS: readonly string[] = [
+  ...new Set(scenarioFields().flatMap(({ when }) => when.map(({ path }) => path))),
+];

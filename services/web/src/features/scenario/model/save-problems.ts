@@ -1,7 +1,7 @@
 import { scenarioField, type Problem } from '@noonwell/schema';
 
 export interface FieldProblem {
-  /** Path into the document; empty where no field can be named. */
+  /** Path into the form: "document.catch.dish.apertureDiameterM", "name"; empty where no field can be named. */
   readonly path: string;
   readonly message: string;
 }
@@ -9,7 +9,7 @@ export interface FieldProblem {
 /** What the server refused, by field of the form. */
 export function problemsByField(problem: Problem): FieldProblem[] {
   const found = (problem.errors ?? []).map(({ path = '', reason, fix }) => ({
-    path: path.replace(/^document\./, ''),
+    path: path === '' || /^(?:document|name|weatherYearId)\b/.test(path) ? path : `document.${path}`,
     message: fix === undefined ? reason : `${reason} ${fix}`,
   }));
   return found.length > 0 ? found : [{ path: '', message: problem.detail ?? problem.title }];
@@ -31,7 +31,10 @@ export function listErrors(errors: unknown, path: readonly string[] = []): Liste
   );
 }
 
+const OTHER_LABELS: Readonly<Record<string, string>> = { name: 'Name', weatherYearId: 'Weather year' };
+
 function labelOf(path: string): string {
-  const field = scenarioField(path) ?? scenarioField(path.replace(/\.\d+$/, ''));
-  return field?.label ?? path;
+  const inDocument = path.replace(/^document\./, '');
+  const field = scenarioField(inDocument) ?? scenarioField(inDocument.replace(/\.\d+$/, ''));
+  return field?.label ?? OTHER_LABELS[path] ?? path;
 }

@@ -1,14 +1,15 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { DEFAULT_VIEW, MAX_SCENARIOS, parseView, serialiseView, type ViewState } from './address.js';
+import { MOST_SCENARIOS } from '@noonwell/schema';
+import { DEFAULT_VIEW, parseView, serialiseView, type ViewState } from './address.js';
 import { CHANNEL_SET_KEYS } from './channel-sets.js';
 import { calendarDay } from './weeks.js';
 
 const ids = (count: number) => fc.uniqueArray(fc.uuid(), { maxLength: count });
 const views: fc.Arbitrary<ViewState> = fc.record({
   baseline: fc.option(fc.uuid()),
-  scenarios: ids(MAX_SCENARIOS),
-  hidden: ids(MAX_SCENARIOS),
+  scenarios: ids(MOST_SCENARIOS),
+  hidden: ids(MOST_SCENARIOS),
   week: fc.option(fc.integer({ min: 0, max: 365 }).map((day) => calendarDay(Date.UTC(2000, 0, 1 + day)))),
   channelSet: fc.constantFrom(...CHANNEL_SET_KEYS),
 });

@@ -1,3 +1,4 @@
+import { MOST_SCENARIOS } from '@noonwell/schema';
 import { CHANNEL_SET_KEYS, type ChannelSetKey } from './channel-sets.js';
 import type { CalendarDay } from './weeks.js';
 
@@ -14,7 +15,6 @@ export interface ViewState {
   readonly channelSet: ChannelSetKey;
 }
 
-export const MAX_SCENARIOS = 6;
 export const DEFAULT_VIEW: ViewState = {
   baseline: null,
   scenarios: [],
@@ -65,7 +65,7 @@ export function serialiseView(view: ViewState): string {
 
 function ids(text: string | null): string[] {
   const found = (text ?? '').split('~').filter((id) => ID.test(id));
-  return [...new Set(found)].slice(0, MAX_SCENARIOS);
+  return [...new Set(found)].slice(0, MOST_SCENARIOS);
 }
 
 function calendarDay(text: string | null): CalendarDay | null {

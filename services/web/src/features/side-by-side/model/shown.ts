@@ -1,5 +1,5 @@
-import type { ScenarioView } from '@noonwell/schema';
-import { MAX_SCENARIOS, type ViewState } from './address.js';
+import { MOST_SCENARIOS, type ScenarioView } from '@noonwell/schema';
+import type { ViewState } from './address.js';
 
 export interface Shown {
   /** Baseline first, then the others in the order of the address or of the study. */
@@ -14,6 +14,6 @@ export function shownScenarios(all: readonly ScenarioView[], view: ViewState): S
   const named = view.scenarios.flatMap((id) => inOrder.find((scenario) => scenario.id === id) ?? []);
   const chosen = named.length > 0 ? named : inOrder;
   const baseline = chosen.find(({ id }) => id === view.baseline) ?? chosen[0] ?? null;
-  const others = chosen.filter((scenario) => scenario !== baseline).slice(0, MAX_SCENARIOS - 1);
+  const others = chosen.filter((scenario) => scenario !== baseline).slice(0, MOST_SCENARIOS - 1);
   return { scenarios: baseline ? [baseline, ...others] : [], baseline, others };
 }

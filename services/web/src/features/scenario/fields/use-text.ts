@@ -1,0 +1,16 @@
+import { useController } from 'react-hook-form';
+
+/** A field of the form as typed text, with its error. */
+export function useText(name: string) {
+  const { field, fieldState } = useController<Record<string, unknown>>({ name });
+  const { ref, onBlur, onChange, value } = field;
+  return {
+    ref,
+    onBlur,
+    text: typeof value === 'string' ? value : '',
+    setText: (text: string) => {
+      onChange(text);
+    },
+    message: fieldState.error?.message ?? null,
+  };
+}
