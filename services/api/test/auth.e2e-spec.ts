@@ -1,5 +1,6 @@
 import { accessSchema, meSchema, problemSchema, type Access } from '@noonwell/schema';
 import type { Response } from 'supertest';
+import { queryAsAdmin } from './support/admin-query';
 import { addTenant, PASSWORD, signIn, type Tenant } from './support/people';
 import { startTestApp, type TestApp } from './support/test-app';
 
@@ -128,7 +129,8 @@ describe('sign-in and sessions', () => {
   it('ends a session that was idle or open too long', async () => {
     for (const column of ['expires_at', 'family_expires_at']) {
       const { cookie } = await open();
-      await asOwnerOfData(
+      await queryAsAdmin(
+        test.database,
         `update refresh_tokens set ${column} = now() - interval '1 second' where used_at is null`,
       );
       await refresh(cookie).expect(401);
@@ -138,7 +140,10 @@ describe('sign-in and sessions', () => {
   it('lets a disabled account neither in nor go on', async () => {
     const analyst = await signIn(test, tenant.people.analyst);
     await analyst.get('/api/auth/me').expect(200);
-    await asOwnerOfData(`update users set disabled_at = now() where id = '${tenant.people.analyst.userId}'`);
+    await queryAsAdmin(
+      test.database,
+      `update users set disabled_at = now() where id = '${tenant.people.analyst.userId}'`,
+    );
     await analyst.get('/api/auth/me').expect(401);
     await analyst.post('/api/auth/refresh').expect(401);
     const again = { email: tenant.people.analyst.email, password: PASSWORD };
@@ -181,13 +186,4 @@ describe('sign-in and sessions', () => {
     }
     await refresh(cookie).set('Sec-Fetch-Site', 'same-origin').expect(200);
   });
-
-  /** As the superuser of the test's server: past row-level security. */
-  async function asOwnerOfData(sql: string): Promise<void> {
-    const { Client } = await import('pg');
-    const client = new Client({ connectionString: test.database.adminUrl });
-    await client.connect();
-    await client.query(sql);
-    await client.end();
-  }
 });
