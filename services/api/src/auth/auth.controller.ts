@@ -45,8 +45,9 @@ export class AuthController {
   }
 
   @Post('sign-in')
-  @LimitSignIn()
+  // Decorators apply from the last line up: the limit counts before a password is looked at.
   @UseGuards(PasswordGuard)
+  @LimitSignIn()
   @ApiBody({ type: SignInDto })
   @ZodResponse({ status: HttpStatus.OK, type: AccessDto })
   signIn(

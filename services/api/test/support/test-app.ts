@@ -5,6 +5,9 @@ import supertest, { type Agent } from 'supertest';
 import { readSettings, type Settings } from '../../src/config/settings';
 import { createApp } from '../../src/create-app';
 
+// Starting the whole API on a busy machine takes longer than jest's 5 s; nothing here measures time.
+jest.setTimeout(60_000);
+
 export interface TestApp {
   readonly app: NestExpressApplication;
   readonly em: EntityManager;
