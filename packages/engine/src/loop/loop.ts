@@ -86,6 +86,8 @@ export class Loop implements IncreasingProblem {
       this.holdSetPoint();
       if (this.step.outletC < bottomC + this.settings.stopDifferenceK) this.outletAtC(0);
     }
+    // A receiver left hotter than the loop may get (after a stop in full sun) is not flooded while it cools.
+    if (!lit && this.outletOverLimit) this.outletAtC(0);
     this.toTank.solve(this.flowKgS, waterEnthalpyJkg(this.step.outletC), this.step.airC, this.step.dtS);
     this.enthalpyRiseJkg = this.flowKgS > 0 ? this.toTank.outletJkg - this.bottomJkg : 0;
     this.heatToStoreW = this.flowKgS * this.enthalpyRiseJkg;

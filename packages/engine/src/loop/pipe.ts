@@ -12,7 +12,7 @@ const COPPER_JM3K = 8960 * 385;
 const FILLING_C = 20;
 
 /** Largest accepted residual of a pipe's balance [W]. */
-const TOLERANCE_W = 1e-7;
+const TOLERANCE_W = 1e-9;
 
 /**
  * One run of exposed pipe, wall and water as one mixed node, implicit in time. What it holds at night it

@@ -28,7 +28,7 @@ export interface AirClimate {
  * ratio 0.4 + 0.01 (mean − 44) and lag 35 − (mean − 44) days: water follows the air a month later and less far,
  * and a little warmer for the heat of the ground it crosses. Half a year is added in the south.
  *
- * @param climate of the site's air **[mean −30…40 °C, spread 0…80 K]**
+ * @param climate of the site's air **[mean −60…45 °C, spread 0…80 K]**
  * @param dayOfYear **[1…366]**
  * @returns **[°C, ≥ 0.5]**
  * @throws DomainError for a climate out of its range
@@ -39,7 +39,7 @@ export interface AirClimate {
  * burchChristensenMainsC({ meanC: 10, monthlySpreadK: 20, southern: false }, 200) // 17.46
  */
 export function burchChristensenMainsC(climate: AirClimate, dayOfYear: number): number {
-  requireRange('mean air temperature [°C]', climate.meanC, -30, 40);
+  requireRange('mean air temperature [°C]', climate.meanC, -60, 45);
   requireRange('spread of the monthly means [K]', climate.monthlySpreadK, 0, 80);
   requireRange('day of the year', dayOfYear, 1, DAYS);
   const meanF = 1.8 * climate.meanC + 32;

@@ -83,11 +83,6 @@ export class CellArray {
   hottestC(incidentW: number, plateC: number): number {
     return plateC + (incidentW / this.areaM2) * this.peakRatio * this.settings.cell.areaResistanceM2KW;
   }
-
-  /** Mean temperature of the array's face [°C]. */
-  meanC(incidentW: number, plateC: number): number {
-    return plateC + (incidentW / this.areaM2) * this.settings.cell.areaResistanceM2KW;
-  }
 }
 
 /** Ratios spread evenly from 1 − u to 1 + u: midpoints of equal parts, so that their mean is 1. */

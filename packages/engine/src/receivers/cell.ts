@@ -8,7 +8,8 @@ import {
   LOWEST_C,
   balanceToleranceW,
   faceLossSlopeWK,
-  faceLossesW,
+  frontLossesW,
+  backLossW,
   heatToWaterSlopeWK,
   heatToWaterW,
   requireFace,
@@ -18,8 +19,12 @@ import type { Receiver, ReceiverOptics, ReceiverStep } from './receiver.js';
 import type { CellReceiverSettings } from './settings.js';
 
 /**
- * A dense array of cells on a cooled plate: heat and power. One lumped plate temperature, implicit in time;
- * the cells ride above it by flux × area resistance. What is absorbed and not converted is heat for the loop.
+ * A dense array of cells on a cooled plate: heat and power. One lumped plate temperature, implicit in time.
+ * What is absorbed and not converted is heat for the loop.
+ *
+ * The face that loses heat stands above the plate by the heat that passes the joint × its resistance. A cell's
+ * own temperature, which decides its efficiency and the limit, is taken as plate + *light* × resistance: a
+ * little high, on the safe side.
  */
 export class CellReceiver implements Receiver, IncreasingProblem {
   readonly optics: ReceiverOptics;
@@ -27,6 +32,8 @@ export class CellReceiver implements Receiver, IncreasingProblem {
   readonly hasCells = true;
   readonly inverter: Inverter;
   readonly array: CellArray;
+  /** Resistance between face and plate [K/W]. */
+  private readonly jointKW: number;
   private plateC: number;
   private step: ReceiverStep | null = null;
 
@@ -39,6 +46,7 @@ export class CellReceiver implements Receiver, IncreasingProblem {
     requireFace(face);
     requireRange('plate to coolant [W/K]', settings.plateUaWK, 1e-3, 1e6);
     this.plateC = initialC;
+    this.jointKW = settings.cell.areaResistanceM2KW / face.sideM ** 2;
     this.array = new CellArray(settings, dish);
     this.inverter = new Inverter(settings.inverter);
     const openingSideM = secondary.kind === 'mixingDuct' ? secondary.entrySideM : face.sideM;
@@ -50,7 +58,6 @@ export class CellReceiver implements Receiver, IncreasingProblem {
     };
   }
 
-  /** `faceC` of the step is the plate's temperature while solving and the mean of the cells afterwards. */
   solve(step: ReceiverStep): void {
     this.step = step;
     const { face, plateUaWK } = this.settings;
@@ -65,7 +72,6 @@ export class CellReceiver implements Receiver, IncreasingProblem {
       HIGHEST_C,
       balanceToleranceW(step.absorbedW),
     );
-    step.faceC = this.array.meanC(step.incidentW, this.solvedPlateC);
     step.hottestC = this.array.hottestC(step.incidentW, this.solvedPlateC);
   }
 
@@ -80,14 +86,16 @@ export class CellReceiver implements Receiver, IncreasingProblem {
     if (!step) return NaN;
     const { face, plateUaWK } = this.settings;
     step.storedW = (face.heatCapacityJK * (plateC - this.plateC)) / step.dtS;
+    const throughJointW =
+      step.storedW + backLossW(face, step, plateC) + heatToWaterW(step, plateC, plateUaWK);
+    step.faceC = Math.max(LOWEST_C, plateC + throughJointW * this.jointKW);
     // An array cannot make more than it absorbs, whatever its fields claim; the inverter holds it back above its rating.
     step.powerDcW = Math.min(
       this.array.powerW(step.incidentW, plateC),
       this.inverter.greatestDcW,
       step.absorbedW,
     );
-    const losses = faceLossesW(face, step, this.array.meanC(step.incidentW, plateC));
-    return step.storedW + losses + step.powerDcW + heatToWaterW(step, plateC, plateUaWK) - step.absorbedW;
+    return throughJointW + frontLossesW(face, step, step.faceC) + step.powerDcW - step.absorbedW;
   }
 
   commit(): void {

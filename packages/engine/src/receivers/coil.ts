@@ -7,7 +7,8 @@ import {
   LOWEST_C,
   balanceToleranceW,
   faceLossSlopeWK,
-  faceLossesW,
+  frontLossesW,
+  backLossW,
   heatToWaterSlopeWK,
   heatToWaterW,
   requireFace,
@@ -67,9 +68,8 @@ export class CoilReceiver implements Receiver, IncreasingProblem {
     if (!step) return NaN;
     const { face, coilUaWK } = this.settings;
     step.storedW = (face.heatCapacityJK * (faceC - this.faceC)) / step.dtS;
-    return (
-      step.storedW + faceLossesW(face, step, faceC) + heatToWaterW(step, faceC, coilUaWK) - step.absorbedW
-    );
+    const lossesW = frontLossesW(face, step, faceC) + backLossW(face, step, faceC);
+    return step.storedW + lossesW + heatToWaterW(step, faceC, coilUaWK) - step.absorbedW;
   }
 
   commit(step: ReceiverStep): void {

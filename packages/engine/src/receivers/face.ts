@@ -17,12 +17,12 @@ export function requireFace(face: FaceSettings): void {
 }
 
 /**
- * Writes the losses of a flat square face at `faceC` into the step and returns their sum [W].
+ * Writes the losses of the front of a flat square face at `faceC` into the step and returns their sum [W].
  *
  * Convection and wind by `flatFaceConvectionWm2K`; radiation εσ(T⁴ − T_air⁴), because a receiver looks at its
- * own mirror, which is at air temperature; the back by its conductance.
+ * own mirror, which is at air temperature.
  */
-export function faceLossesW(face: FaceSettings, step: ReceiverStep, faceC: number): number {
+export function frontLossesW(face: FaceSettings, step: ReceiverStep, faceC: number): number {
   const areaM2 = face.sideM * face.sideM;
   const windMs = step.windMs * face.windHeightFactor;
   const film = flatFaceConvectionWm2K(
@@ -33,11 +33,15 @@ export function faceLossesW(face: FaceSettings, step: ReceiverStep, faceC: numbe
     face.sideM,
     step.pressurePa,
   );
-  const aboveAirK = faceC - step.airC;
-  step.convectionW = film * areaM2 * aboveAirK;
+  step.convectionW = film * areaM2 * (faceC - step.airC);
   step.radiationW = areaM2 * netRadiationWm2(face.emittance, faceC, step.airC);
-  step.backLossW = face.backLossWK * aboveAirK;
-  return step.convectionW + step.radiationW + step.backLossW;
+  return step.convectionW + step.radiationW;
+}
+
+/** Writes the loss through the back, which is at `backC`, into the step and returns it [W]. */
+export function backLossW(face: FaceSettings, step: ReceiverStep, backC: number): number {
+  step.backLossW = face.backLossWK * (backC - step.airC);
+  return step.backLossW;
 }
 
 /** Slope of the losses with the face's temperature, close enough for a first step of the solver [W/K]. */
@@ -82,5 +86,5 @@ export const HIGHEST_C = 50_000;
 
 /** Largest accepted residual of a receiver's balance [W]. */
 export function balanceToleranceW(absorbedW: number): number {
-  return 1e-10 * absorbedW + 1e-7;
+  return 1e-11 * absorbedW + 1e-8;
 }

@@ -75,7 +75,7 @@ export interface Receiver {
   readonly hasCells: boolean;
   /**
    * Balance at the end of the step: absorbed = losses + electricity + heat to the water + heat kept, solved
-   * implicitly in the face's temperature to 1e-10 of the absorbed power.
+   * implicitly in the face's temperature to 1e-11 of the absorbed power.
    *
    * @throws ConvergenceError when no balance is found
    */

@@ -3,7 +3,7 @@ import { createDispatch, dispatchPower } from '../electricity/dispatch.js';
 import { siteUseW } from '../electricity/use.js';
 import { DomainError, RunError } from '../errors.js';
 import { ACCOUNT_INDEX } from '../ledger/accounts.js';
-import { RESIDUAL_LIMIT, findImbalance, findImbalances } from '../ledger/balance.js';
+import { RESIDUAL_LIMIT, ROUND_OFF, findImbalance, findImbalances } from '../ledger/balance.js';
 import { LEDGER_INDEX } from '../ledger/lines.js';
 import type { Load } from '../load/load.js';
 import { createLoad } from '../load/registry.js';
@@ -76,6 +76,7 @@ class Simulation implements YearRun {
   private readonly loop: Loop;
   private readonly tank: Tank;
   private readonly tankStep = createTankStep();
+  private readonly layerKg: number;
   private readonly load: Load;
   private readonly siteUseW: Float64Array;
   private readonly dispatch = createDispatch();
@@ -90,6 +91,7 @@ class Simulation implements YearRun {
 
   private storeFull = false;
   private tankEnergyJ: number;
+  private tankEnergyMaxJ = 0;
   private pumpSeconds = 0;
   private pipeFreezeSeconds = 0;
   private faceMaxC = -Infinity;
@@ -115,6 +117,7 @@ class Simulation implements YearRun {
     this.dishLedger = new DishLedger(machine.dish, this.receiver.optics);
     this.loop = new Loop(machine.loop, this.receiver, this.receiverStep, airC);
     this.tank = createTank(machine.tank, machine.store.initialC);
+    this.layerKg = this.tank.massKg / this.tank.layers;
     this.tankEnergyJ = this.tank.energyJ();
     this.load = createLoad(machine.load, this.calendar, createMains(weather));
     this.siteUseW = siteUseW(machine.electricityUse, this.calendar, this.intervalS);
@@ -145,28 +148,15 @@ class Simulation implements YearRun {
 
   private runRecord(record: number): void {
     const { weather, receiverStep, tankStep } = this;
-    const dtS = this.machine.stepS;
-    receiverStep.dtS = dtS;
     receiverStep.airC = weather.dryBulbC[record]!;
     receiverStep.windMs = weather.windMs[record]!;
     receiverStep.pressurePa = weather.pressurePa[record]!;
-    tankStep.dtS = dtS;
     tankStep.surroundingsC = weather.dryBulbC[record]!;
     this.load.ask(record, tankStep);
     this.placeSun(record);
     this.beginRecord();
 
-    for (let step = 0; step < this.steps; step++) {
-      const sun = this.suns[step]!;
-      const beamW = this.stepDniWm2[step]! * this.apertureM2;
-      const state = this.collect(sun, this.stepDniWm2[step]!, beamW);
-      this.stateSeconds[state]! += dtS;
-      this.keepDish(state, beamW * dtS);
-      this.keepReceiverAndLoop();
-      this.chargeAndDraw();
-      this.usePower(this.siteUseW[record]!, state === TRACKER_STATE_INDEX.tracking);
-      this.watch(state === TRACKER_STATE_INDEX.tracking);
-    }
+    for (let step = 0; step < this.steps; step++) this.runStep(record, step);
     this.endRecord(record);
   }
 
@@ -189,10 +179,39 @@ class Simulation implements YearRun {
     spreadBeam(weather.dniWm2[record]!, this.sunlit, this.stepDniWm2);
   }
 
-  /** Decides the tracker's state and solves receiver and loop under it; commits the solution. */
-  private collect(sun: SunPosition, dniWm2: number, beamW: number): number {
+  /**
+   * One step, cut into equal parts where the loop would move more than a layer of the tank: the loop sees the
+   * bottom layer as it stood when its part began, so that layer must not turn over unseen.
+   */
+  private runStep(record: number, step: number): void {
+    const { receiverStep, tankStep } = this;
+    const sun = this.suns[step]!;
+    const dniWm2 = this.stepDniWm2[step]!;
+    const beamW = dniWm2 * this.apertureM2;
+    receiverStep.dtS = this.machine.stepS;
+    const mounted = this.tracker.decide(sun, dniWm2, receiverStep.windMs, receiverStep.dtS);
+    let state = this.collect(mounted, sun, beamW);
+    const parts = Math.max(1, Math.ceil((this.loop.flowKgS * receiverStep.dtS) / this.layerKg));
+    const dtS = receiverStep.dtS / parts;
+    receiverStep.dtS = dtS;
+    tankStep.dtS = dtS;
+    for (let part = 0; part < parts; part++) {
+      if (parts > 1) state = this.collect(mounted, sun, beamW);
+      this.loop.commit();
+      const tracking = state === TRACKER_STATE_INDEX.tracking;
+      this.stateSeconds[state]! += dtS;
+      this.keepDish(state, beamW * dtS);
+      this.keepReceiverAndLoop();
+      this.chargeAndDraw();
+      this.usePower(this.siteUseW[record]!, tracking);
+      this.watch(tracking);
+    }
+  }
+
+  /** The state that the mount's state, the store and the receiver's limits leave; solves receiver and loop under it. */
+  private collect(mounted: number, sun: SunPosition, beamW: number): number {
     const { loop, receiverStep, tank } = this;
-    let state = this.tracker.decide(sun, dniWm2, receiverStep.windMs, receiverStep.dtS);
+    let state = mounted;
     const bottomC = tank.bottomC;
     if (state === TRACKER_STATE_INDEX.tracking && this.topLayerFull())
       state = TRACKER_STATE_INDEX.defocusedStoreFull;
@@ -210,7 +229,6 @@ class Simulation implements YearRun {
       receiverStep.tiltDownRad = PARKED_TILT_RAD;
       loop.solve(bottomC);
     }
-    loop.commit();
     return state;
   }
 
@@ -260,12 +278,13 @@ class Simulation implements YearRun {
     const energyJ = tank.energyJ();
     ledger[LEDGER_INDEX.storeStored]! += energyJ - this.tankEnergyJ;
     this.tankEnergyJ = energyJ;
+    this.tankEnergyMaxJ = Math.max(this.tankEnergyMaxJ, Math.abs(energyJ));
   }
 
   private usePower(siteW: number, tracking: boolean): void {
     const ledger = this.recorder.recordJ;
     const { dispatch, machine } = this;
-    const dtS = machine.stepS;
+    const dtS = this.receiverStep.dtS;
     const trackerW = machine.trackerPower.standbyW + (tracking ? machine.trackerPower.movingW : 0);
     dispatchPower(
       this.receiverStep.powerDcW,
@@ -332,8 +351,21 @@ class Simulation implements YearRun {
     this.tankTopMaxC = Math.max(this.tankTopMaxC, tank.topC);
   }
 
+  /**
+   * Largest accepted residual over a time with the given beam [J]. A time without beam has to balance too, so
+   * the beam never counts less than one record of full sun; a large store's own
+   * round-off, which grows as a random walk, comes on top.
+   */
+  private residualLimitJ(beamJ: number): number {
+    const leastBeamJ = FULL_SUN_WM2 * this.apertureM2 * this.intervalS;
+    return (
+      RESIDUAL_LIMIT * Math.max(beamJ, leastBeamJ) +
+      ROUND_OFF * this.tankEnergyMaxJ * Math.sqrt((this.done + 1) * this.steps)
+    );
+  }
+
   private requireBalance(record: number): void {
-    const limitJ = RESIDUAL_LIMIT * FULL_SUN_WM2 * this.apertureM2 * this.intervalS;
+    const limitJ = this.residualLimitJ(0);
     const imbalance = findImbalance(this.recorder.recordJ, limitJ);
     if (imbalance) {
       throw new RunError(
@@ -348,8 +380,7 @@ class Simulation implements YearRun {
     if (this.done < this.records) throw new DomainError('records run', this.done, `all ${this.records}`);
     const { weather, recorder, machine } = this;
     const beamJ = recorder.yearJ[LEDGER_INDEX.beamOnAperture]!;
-    // A run without any beam still has to balance, so the limit never falls below one record of full sun.
-    const limitJ = RESIDUAL_LIMIT * Math.max(beamJ, FULL_SUN_WM2 * this.apertureM2 * this.intervalS);
+    const limitJ = this.residualLimitJ(beamJ);
     const imbalances = findImbalances(recorder.yearJ, limitJ);
     if (imbalances.length > 0) {
       const parts = imbalances.map(({ part }) => part).join(' and ');

@@ -81,6 +81,7 @@ describe('documents that are refused', () => {
     ['a tank of 0 L', 'carryAndKeep.tank.volumeM3', 0],
     ['not a number', 'catch.dish.reflectance', NaN],
     ['a least flow above the greatest', 'carryAndKeep.pump.maxFlowKgS', 0.005],
+    ['a pump that empties the tank within two minutes', 'carryAndKeep.pump.maxFlowKgS', 17],
     ['a set point above the limit', 'carryAndKeep.pump.outletLimitC', 90],
     ['a resume wind above the stow wind', 'catch.tracker.resumeWindMs', 20],
     ['no hour with a load', 'use.loads.0.hourlyWeights', Array<number>(24).fill(0)],
@@ -91,6 +92,15 @@ describe('documents that are refused', () => {
     const problems = problemsOf(changed(path, value));
     expect(problems.map((problem) => problem.path)).toContain(path);
     for (const problem of problems) expect(problem.message).not.toBe('');
+  });
+
+  it('a load that draws the tank within a minute', () => {
+    expect(problemsOf(changed('use.loads.0.litresPerDay', 200_000)).length).toBe(0);
+    const small = changed('carryAndKeep.tank.volumeM3', 0.3) as {
+      use: { loads: { litresPerDay: number }[] };
+    };
+    small.use.loads[0]!.litresPerDay = 200_000;
+    expect(problemsOf(small).map(({ path }) => path)).toEqual(['use.loads.0.litresPerDay']);
   });
 
   it('an inverter whose standing loss is more than its whole loss', () => {

@@ -7,7 +7,7 @@ export const trackerSchema = z.strictObject({
   azimuthSpanDeg: numberField({
     label: 'Azimuth travel',
     unit: '°',
-    min: 0,
+    min: 1,
     max: 360,
     defaultValue: 250,
     help: 'Whole span of azimuth that the mount can turn through.',
