@@ -42,7 +42,10 @@ export const runSummarySchema = z.object({
   backupHeatKwh: figure('kWh', 'Heat from the backup boiler'),
   unmetHeatKwh: figure('kWh', 'Heat wanted and not supplied'),
   loadHeatKwh: figure('kWh', 'Heat that the load needs'),
-  solarFraction: figure('1', '1 − backup heat / heat that the load needs; 0 where there is no load'),
+  solarFraction: figure(
+    '1',
+    'Solar fraction: 1 − backup heat / heat that the load needs; 0 where there is no load',
+  ),
   boilerFuelKwh: figure('kWh', 'Fuel energy that the boiler burned'),
   powerDcKwh: figure('kWh', 'Electricity from the cells, direct current'),
   powerAcKwh: figure('kWh', 'Electricity behind the inverter'),

@@ -1,9 +1,8 @@
 import { Button, makeStyles, MessageBar, MessageBarBody, tokens } from '@fluentui/react-components';
-import { DataBarVerticalRegular, PlayRegular } from '@fluentui/react-icons';
+import { PlayRegular } from '@fluentui/react-icons';
 import type { StudyView } from '@noonwell/schema';
 import { useMay } from '../../shared/api/me.js';
 import { ErrorState } from '../../shared/components/error-state.js';
-import { LinkButton } from '../../shared/components/router-link.js';
 import { Section } from '../../shared/components/section.js';
 import { useStartRuns } from './api.js';
 import { isActive, STATE_WORDS, shownState, whyNotRunnable } from './model/run-words.js';
@@ -57,15 +56,6 @@ export function RunPanel({ study }: { study: StudyView }) {
             >
               Run all scenarios
             </Button>
-          )}
-          {done > 0 && (
-            <LinkButton
-              to={`/studies/${study.id}/side-by-side`}
-              appearance={complete ? 'primary' : 'secondary'}
-              icon={<DataBarVerticalRegular />}
-            >
-              Side by side
-            </LinkButton>
           )}
         </div>
       }

@@ -44,7 +44,7 @@ export function HoursChart({ channels, loaded, week }: HoursChartProps) {
   return (
     <Plot
       title="Hours of the week"
-      description={`${dayWords(week.from)} to ${dayWords(week.to)}, local standard time, each value the mean of its record. Drag to look closer, press twice to see the whole week again.`}
+      description={`${dayWords(week.from)} to ${dayWords(week.to)}, local standard time. Each step is the mean of a weather record. Drag to look closer, press twice to see the whole week again.`}
       traces={figure.traces}
       layout={{ ...figure.layout, margin: { t: 44 } }}
       height={height}

@@ -1,21 +1,21 @@
 import { makeStyles, mergeClasses, Switch, tokens } from '@fluentui/react-components';
 import { useState } from 'react';
 import { NumberTable, type TableColumn } from '../../shared/components/number-table.js';
-import { ScenarioSwatch } from '../../shared/components/scenario-swatch.js';
 import { Section } from '../../shared/components/section.js';
 import { formatSignificant, formatSigned } from '../../shared/format/number.js';
 import type { Compared } from './model/compared.js';
 import { differences, type Difference, type Verdict } from './model/differences.js';
 import { FIGURES, type Figure } from './model/figures.js';
 import { MonthlyCharts } from './monthly-charts.js';
+import { ScenarioHeading } from './scenario-heading.js';
 
 const FEW_DIGITS = 3;
 const MORE_DIGITS = 6;
 
 const useStyles = makeStyles({
-  head: { display: 'inline-flex', alignItems: 'center', gap: '8px', whiteSpace: 'normal' },
+  label: { minWidth: '180px' },
   unit: { color: tokens.colorNeutralForeground3 },
-  verdict: { display: 'block', fontSize: tokens.fontSizeBase200, color: tokens.colorNeutralForeground3 },
+  verdict: { color: tokens.colorNeutralForeground3 },
   worse: { color: tokens.colorPaletteRedForeground1 },
   better: { color: tokens.colorPaletteGreenForeground1 },
 });
@@ -70,30 +70,21 @@ function useColumns(
   digits: number,
 ): readonly TableColumn<Figure>[] {
   const styles = useStyles();
-  const heading = ({ name, position }: Compared, below: string) => (
-    <span className={styles.head}>
-      <ScenarioSwatch position={position} />
-      <span>
-        {name}
-        {below}
-      </span>
-    </span>
-  );
   return [
     {
       key: 'figure',
       heading: 'In the year',
       kind: 'text',
       cell: ({ label, unit }) => (
-        <>
+        <div className={styles.label}>
           {label}
           {unit !== '1' && <span className={styles.unit}>, {unit}</span>}
-        </>
+        </div>
       ),
     },
     {
       key: 'baseline',
-      heading: heading(baseline, ' (baseline)'),
+      heading: <ScenarioHeading scenario={baseline} note="baseline" />,
       kind: 'number',
       cell: ({ key }) => formatSignificant(baseline.summary[key], digits),
     },
@@ -104,7 +95,7 @@ function useColumns(
       return [
         {
           key: `${other.scenarioId}-value`,
-          heading: heading(other, ''),
+          heading: <ScenarioHeading scenario={other} />,
           kind: 'number',
           cell: ({ key }) => formatSignificant(other.summary[key], digits),
         },
@@ -113,22 +104,8 @@ function useColumns(
           heading: 'Difference',
           kind: 'number',
           cell: ({ key }) => {
-            const { absolute = null, verdict = 'unknown' } = byKey.get(key) ?? {};
-            const { worse, better } = styles;
-            return (
-              <>
-                {verdict === 'equal' ? '0' : formatSigned(absolute, digits)}
-                <span
-                  className={mergeClasses(
-                    styles.verdict,
-                    verdict === 'worse' && worse,
-                    verdict === 'better' && better,
-                  )}
-                >
-                  {VERDICT_WORDS[verdict]}
-                </span>
-              </>
-            );
+            const difference = byKey.get(key);
+            return difference?.verdict === 'equal' ? '0' : formatSigned(difference?.absolute, digits);
           },
         },
         {
@@ -141,6 +118,25 @@ function useColumns(
             if (difference?.verdict === 'equal') return '0';
             const ratio = difference?.ratio ?? null;
             return formatSigned(ratio === null ? null : ratio * 100, digits);
+          },
+        },
+        {
+          key: `${other.scenarioId}-verdict`,
+          heading: 'That is',
+          kind: 'text',
+          cell: ({ key }) => {
+            const verdict = byKey.get(key)?.verdict ?? 'unknown';
+            return (
+              <span
+                className={mergeClasses(
+                  styles.verdict,
+                  verdict === 'worse' && styles.worse,
+                  verdict === 'better' && styles.better,
+                )}
+              >
+                {VERDICT_WORDS[verdict]}
+              </span>
+            );
           },
         },
       ];

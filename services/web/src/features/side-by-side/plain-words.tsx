@@ -16,7 +16,7 @@ const useStyles = makeStyles({
     borderRadius: tokens.borderRadiusMedium,
     '@media (max-width: 639px)': { padding: '12px' },
   },
-  line: { display: 'grid', gridTemplateColumns: '24px 1fr', gap: '8px', margin: 0, maxWidth: '95ch' },
+  line: { display: 'grid', gridTemplateColumns: '24px 1fr', gap: '8px', margin: 0, maxWidth: '1040px' },
   first: {
     fontSize: tokens.fontSizeBase500,
     lineHeight: tokens.lineHeightBase500,

@@ -1,14 +1,13 @@
 import { makeStyles, tokens } from '@fluentui/react-components';
 import type { LedgerDirection } from '@noonwell/engine';
 import { useMemo } from 'react';
-import { Figures } from '../../shared/components/figures.js';
 import { NumberTable, type TableColumn } from '../../shared/components/number-table.js';
-import { ScenarioSwatch } from '../../shared/components/scenario-swatch.js';
 import { Section } from '../../shared/components/section.js';
 import { formatFixed } from '../../shared/format/number.js';
 import type { Compared } from './model/compared.js';
 import { ledgerTable, type LedgerGroup } from './model/ledger-table.js';
 import { formatResidual } from './model/residual.js';
+import { ScenarioHeading } from './scenario-heading.js';
 
 const useStyles = makeStyles({
   text: { margin: '0 0 12px', maxWidth: '80ch', color: tokens.colorNeutralForeground2 },
@@ -19,7 +18,7 @@ const useStyles = makeStyles({
     gap: '16px',
     marginTop: '16px',
   },
-  head: { display: 'inline-flex', alignItems: 'center', gap: '8px', whiteSpace: 'normal' },
+  all: { maxWidth: '640px' },
 });
 
 const DIRECTION_WORDS: Readonly<Record<LedgerDirection, string>> = {
@@ -47,13 +46,29 @@ export function WhereLost({ scenarios }: { scenarios: readonly Compared[] }) {
         positive, what leaves it or stays in it is negative: each column adds up to its residual, the last
         line, which is the error of the calculation and not a loss.
       </p>
-      <Figures
-        label="Residual of all parts"
-        figures={scenarios.map(({ name }, index) => ({
-          name: `${name}: residual of all parts`,
-          value: `${formatResidual(table.residualKwh[index])} kWh, ${formatResidual(table.residualOfBeam[index])} of the beam`,
-        }))}
-      />
+      <div className={styles.all}>
+        <NumberTable
+          caption="Residuals of all parts by size"
+          columns={[
+            { key: 'name', heading: 'Scenario', kind: 'text', cell: (index) => scenarios[index]?.name },
+            {
+              key: 'kwh',
+              heading: 'Residual',
+              unit: 'kWh',
+              kind: 'number',
+              cell: (index) => formatResidual(table.residualKwh[index]),
+            },
+            {
+              key: 'share',
+              heading: 'Over the beam on the aperture',
+              kind: 'number',
+              cell: (index) => formatResidual(table.residualOfBeam[index]),
+            },
+          ]}
+          rows={scenarios.map((_, index) => index)}
+          rowKey={String}
+        />
+      </div>
       <div className={styles.parts}>
         {table.groups.map((group) => (
           <PartTable key={group.part} group={group} scenarios={scenarios} />
@@ -64,18 +79,12 @@ export function WhereLost({ scenarios }: { scenarios: readonly Compared[] }) {
 }
 
 function PartTable({ group, scenarios }: { group: LedgerGroup; scenarios: readonly Compared[] }) {
-  const styles = useStyles();
   const columns: TableColumn<Row>[] = [
     { key: 'line', heading: capital(group.part), kind: 'text', cell: ({ label }) => label },
-    { key: 'direction', heading: '', kind: 'text', cell: ({ direction }) => direction },
-    ...scenarios.map(({ scenarioId, name, position }, index): TableColumn<Row> => ({
-      key: scenarioId,
-      heading: (
-        <span className={styles.head}>
-          <ScenarioSwatch position={position} />
-          {name}
-        </span>
-      ),
+    { key: 'direction', heading: 'It', kind: 'text', cell: ({ direction }) => direction },
+    ...scenarios.map((scenario, index): TableColumn<Row> => ({
+      key: scenario.scenarioId,
+      heading: <ScenarioHeading scenario={scenario} />,
       unit: 'kWh',
       kind: 'number',
       cell: ({ values }) => values[index],
@@ -105,7 +114,7 @@ function rowsOf({ rows, residualsKwh }: LedgerGroup): Row[] {
     {
       key: 'residual',
       label: 'Residual',
-      direction: 'adds up to',
+      direction: '',
       values: residualsKwh.map(formatResidual),
       total: true,
     },

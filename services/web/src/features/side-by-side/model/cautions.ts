@@ -11,7 +11,8 @@ export const HOT_FACE_C = 550;
 /** Common practice, no source: water above this scalds within seconds. */
 export const SCALD_C = 60;
 
-const DEFER =
+/** Stands above every list of cautions. */
+export const DEFER_TO_CODES =
   'This is a calculation, not a permit: local codes and licensed practice decide, and they come before anything said here.';
 
 /** What can hurt someone, said where the results stand that show it. */
@@ -20,7 +21,7 @@ export function cautions(all: readonly Compared[]): Caution[] {
     {
       key: 'focus',
       title: 'The focus blinds and burns',
-      text: `A dish that faces the sun can injure eyes and set things alight at and near its focus, also while it moves on or off the sun and when it is left half built. Keep people, sight lines and anything that burns away from it. ${DEFER}`,
+      text: `A dish that faces the sun can injure eyes and set things alight at and near its focus, also while it moves on or off the sun and when it is left half built. Keep people, sight lines and anything that burns away from it.`,
     },
   ];
   const hot = all.filter(({ summary }) => summary.faceMaxC > HOT_FACE_C);
@@ -28,7 +29,7 @@ export function cautions(all: readonly Compared[]): Caution[] {
     found.push({
       key: 'hotFace',
       title: `The receiver's face reaches ${atMost(hot, ({ summary }) => summary.faceMaxC)} °C`,
-      text: `${names(hot)}: above about ${HOT_FACE_C} °C ordinary metal, coating and insulation lose strength or burn, and a stopped pump makes it hotter still. Ask the maker for the limit and for what turns the dish off the sun without power. ${DEFER}`,
+      text: `${names(hot)}: above about ${HOT_FACE_C} °C ordinary metal, coating and insulation lose strength or burn, and a stopped pump makes it hotter still. Ask the maker for the limit and for what turns the dish off the sun without power.`,
     });
   }
   const freezing = all.filter(({ summary }) => summary.pipeFreezeHours > 0);
@@ -36,7 +37,7 @@ export function cautions(all: readonly Compared[]): Caution[] {
     found.push({
       key: 'freezing',
       title: `Water in a pipe below 0 °C for up to ${atMost(freezing, ({ summary }) => summary.pipeFreezeHours)} h`,
-      text: `${names(freezing)}: a loop with plain water would freeze and can burst, and thawing water runs out hot or cold where nobody expects it. Draining, heat tracing or an antifreeze must be designed in. ${DEFER}`,
+      text: `${names(freezing)}: a loop with plain water would freeze and can burst, and thawing water runs out hot or cold where nobody expects it. Draining, heat tracing or an antifreeze must be designed in.`,
     });
   }
   const scalding = all.filter(
@@ -51,7 +52,7 @@ export function cautions(all: readonly Compared[]): Caution[] {
     found.push({
       key: 'scald',
       title: `Water hotter than ${SCALD_C} °C scalds`,
-      text: `${names(scalding)}: store, pipes and taps hold water that burns skin within seconds, and shut-in water builds pressure as it warms. Mixing valves, relief valves and signs belong to the design; store water that is kept lukewarm can breed legionella. ${DEFER}`,
+      text: `${names(scalding)}: store, pipes and taps hold water that burns skin within seconds, and shut-in water builds pressure as it warms. Mixing valves, relief valves and signs belong to the design; store water that is kept lukewarm can breed legionella.`,
     });
   }
   const live = all.filter(({ summary }) => summary.powerDcKwh > 0);
@@ -59,7 +60,7 @@ export function cautions(all: readonly Compared[]): Caution[] {
     found.push({
       key: 'electricity',
       title: 'Cells in light are live',
-      text: `${names(live)}: direct current flows whenever light falls on the cells, also with the inverter off, and it does not let go of an arc. ${DEFER}`,
+      text: `${names(live)}: direct current flows whenever light falls on the cells, also with the inverter off, and it does not let go of an arc.`,
     });
   }
   return found;

@@ -16,6 +16,7 @@ function differenceOf(key: FigureKey, baseline: number | null, other: number | n
 describe('differences', () => {
   it('has a name and a unit for every figure, taken from the schema', () => {
     expect(FIGURES.filter(({ label, unit }) => label === '' || unit === '')).toEqual([]);
+    expect(FIGURES.find(({ key }) => key === 'solarFraction')?.label).toBe('Solar fraction');
     expect(FIGURES.find(({ key }) => key === 'cellMaxC')).toMatchObject({
       label: 'Hottest cell',
       unit: '°C',

@@ -47,5 +47,7 @@ export const FIGURES: readonly Figure[] = SHOWN.map(([key, welcome]) => ({
 function describe(schema: Shape[FigureKey]): { label: string; unit: string } {
   // A figure that may be missing carries its description on the number inside.
   const meta = schema.meta() ?? ('unwrap' in schema ? schema.unwrap().meta() : undefined);
-  return { label: meta?.description ?? '', unit: typeof meta?.unit === 'string' ? meta.unit : '' };
+  // "Solar fraction: 1 − …": the name stands before the colon, what it means behind it.
+  const [label = ''] = (meta?.description ?? '').split(':');
+  return { label, unit: typeof meta?.unit === 'string' ? meta.unit : '' };
 }

@@ -1,4 +1,4 @@
-import type { ChannelDefinition } from '@noonwell/engine';
+import type { ChannelDefinition, StateChannel } from '@noonwell/engine';
 import type { Data, Layout } from 'plotly.js';
 import type { Columns } from '../../../shared/api/arrow.js';
 import type { MeaningColours, ScenarioMark } from '../../../shared/theme/colours.js';
@@ -24,6 +24,8 @@ export function shownWeek(column: Column, week: Week, channel: ChannelDefinition
   const view = weekOf(column, week);
   return factor === 1 ? view : view.map((value) => value * factor);
 }
+
+const AT_THE_END: ReadonlySet<string> = new Set<StateChannel>(['tankTopC', 'tankBottomC']);
 
 /** Share of the figure's height between two panels. */
 const GAP = 0.055;
@@ -75,6 +77,8 @@ export function hourFigure(
       font: { size: 12, color: colours.mutedText },
     });
     const once = isOfTheWeather(channel.key);
+    // A record's mean holds from its start to the next one's; a store's temperature is taken at its end.
+    const atEnd = AT_THE_END.has(channel.key);
     for (const { name, mark, columns, week } of once ? drawn.slice(0, 1) : drawn) {
       const column = columns.get(channel.key);
       const start = columns.get('startLocalMs');
@@ -85,12 +89,11 @@ export function hourFigure(
         name: once ? channel.label : name,
         legendgroup: once ? channel.key : name,
         showlegend: !once && !named.has(name),
-        x: nominalTimes(start, week),
+        x: nominalTimes(start, week, atEnd ? 1 : 0),
         y: shownWeek(column, week, channel),
         yaxis: index === 0 ? 'y' : `y${index + 1}`,
-        // A record is a mean from its start to the next one's.
         line: {
-          shape: 'hv',
+          shape: atEnd ? 'linear' : 'hv',
           width: once ? 1.5 : 2,
           color: once ? (channel.key === 'dniWm2' ? colours.sun : colours.mutedText) : mark.colour,
           dash: once ? 'solid' : mark.dash,
@@ -106,10 +109,13 @@ export function hourFigure(
  * Times of the week that run on evenly: a typical year joins months of different years, and a week across
  * the joint must not be torn apart.
  */
-export function nominalTimes(start: Column, week: Week): Float64Array {
+export function nominalTimes(start: Column, week: Week, recordsLater = 0): Float64Array {
   const first = start[week.start]!;
   const interval = week.end - week.start > 1 ? start[week.start + 1]! - first : 0;
-  return Float64Array.from({ length: week.end - week.start }, (_, index) => first + index * interval);
+  return Float64Array.from(
+    { length: week.end - week.start },
+    (_, index) => first + (index + recordsLater) * interval,
+  );
 }
 
 type AxisName = `yaxis${'' | 2 | 3 | 4 | 5 | 6 | 7 | 8 | 9}`;

@@ -7,7 +7,7 @@ import { plainSentences as plainSentencesAsShown } from './plain-sentence.js';
 const plainSentences: typeof plainSentencesAsShown = (baseline, other) =>
   plainSentencesAsShown(baseline, other).map(({ tone, text }) => ({
     tone,
-    text: text.replaceAll('\u202f', ' '),
+    text: text.replaceAll('\u00a0', ' '),
   }));
 
 const coil = comparedFixture({ summary: { heatDeliveredKwh: 10_000, powerAcKwh: 0, loadHeatKwh: 16_000 } });
