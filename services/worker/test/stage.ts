@@ -1,9 +1,12 @@
 import { randomUUID } from 'node:crypto';
 import { join } from 'node:path';
+import { BullModule } from '@nestjs/bullmq';
 import { Test, type TestingModule } from '@nestjs/testing';
+import { MikroORM } from '@mikro-orm/postgresql';
 import { MODEL_VERSION, type WeatherYear } from '@noonwell/engine';
 import {
   Membership,
+  OutboxMessage,
   RUNS_CHANNEL,
   RunResultRow,
   RunRow,
@@ -14,19 +17,25 @@ import {
   WeatherColumns,
   WeatherYear as WeatherYearRow,
   Workspace,
+  chooseQueueBackend,
   createOrm,
   listen,
   requestRun,
   withScope,
   withWorkspace,
   type Listener,
+  type RunOutcome,
 } from '@noonwell/persistence';
-import { newScenario, type RunYearJob } from '@noonwell/schema';
+import { RUN_YEAR_QUEUE, newScenario, type RunYearJob } from '@noonwell/schema';
 import { createTestDatabase, type TestDatabase } from '@noonwell/testkit/postgres';
 import { syntheticYear } from '@noonwell/testkit';
 import { encodeWeatherYear, summariseWeather } from '@noonwell/weather';
+import { Worker, type Job } from 'bullmq';
+import pg from 'pg';
 import type { ThreadEntry } from '../src/jobs/run-year/threads';
-import type { WorkerSettings } from '../src/settings';
+import { OutboxRelay } from '../src/outbox/outbox-relay';
+import { Reconciler } from '../src/reconciler/reconciler';
+import { WORKER_SETTINGS, type WorkerSettings } from '../src/settings';
 import { WorkerModule } from '../src/worker.module';
 import { Gate } from './gate';
 
@@ -45,11 +54,28 @@ export function gatedThread(gate: Gate): ThreadEntry {
   };
 }
 
+/** Any result will do where only its fate is looked at. */
+export const OUTCOME: RunOutcome = {
+  modelVersion: MODEL_VERSION,
+  summary: '{}',
+  columns: Uint8Array.of(1, 2, 3),
+  engineMs: 1,
+};
+
+export type Parts = TestingModule;
+
+export interface HandWorker {
+  readonly token: string;
+  /** Makes the run's job active, and those before it. */
+  take(runId: string): Promise<Job<unknown>>;
+}
+
 type Orm = Awaited<ReturnType<typeof createOrm>>;
 
 /** A database of its own with one workspace, one person and one scenario, and what tests do with them. */
 export class Stage {
   readonly workers: TestingModule[] = [];
+  private readonly hands: Worker[] = [];
   private readonly listeners = new Set<Listener>();
 
   private constructor(
@@ -94,11 +120,55 @@ export class Stage {
     return app;
   }
 
-  /** A new version of the scenario with its run, queued in one transaction. */
-  async queueRun(document: unknown = newScenario()): Promise<RunYearJob> {
+  /** Relay, reconciler and queue without a worker and without timers: tests call them by hand. */
+  async startParts(): Promise<Parts> {
+    const parts = await Test.createTestingModule({
+      imports: [
+        BullModule.forRoot({ connection: chooseQueueBackend(this.settings).connection }),
+        BullModule.registerQueue({ name: RUN_YEAR_QUEUE }),
+      ],
+      providers: [
+        { provide: WORKER_SETTINGS, useValue: this.settings },
+        { provide: MikroORM, useValue: this.orm },
+        OutboxRelay,
+        Reconciler,
+      ],
+    }).compile();
+    parts.useLogger(false);
+    this.workers.push(parts);
+    return parts;
+  }
+
+  /** Takes jobs from the queue by hand. */
+  handWorker(): HandWorker {
+    const { connection } = chooseQueueBackend(this.settings);
+    const worker = new Worker(RUN_YEAR_QUEUE, null, { connection, lockDuration: 60_000 });
+    this.hands.push(worker);
+    const token = randomUUID();
+    return {
+      token,
+      take: async (runId) => {
+        for (;;) {
+          // Declared as always giving a job, it gives none from an empty queue.
+          const job = (await worker.getNextJob(token, { block: false })) as Job<unknown> | undefined;
+          if (job === undefined) throw new Error(`The job of run ${runId} does not wait.`);
+          if (job.id === runId) return job;
+        }
+      },
+    };
+  }
+
+  /**
+   * A new version of the scenario with its run, queued in one transaction.
+   * @param beforeCommit what happens elsewhere while that transaction is still open
+   */
+  async queueRun(
+    document: unknown = newScenario(),
+    beforeCommit: (job: RunYearJob) => Promise<void> = () => Promise.resolve(),
+  ): Promise<RunYearJob> {
     const { workspace, user, study, scenario, weather } = this.ids;
     const versionId = randomUUID();
-    const runId = await withWorkspace(this.orm.em, workspace, async (em) => {
+    const job = await withWorkspace(this.orm.em, workspace, async (em) => {
       const version = 1 + (await em.count(ScenarioVersion, { scenario }));
       await em.insert(ScenarioVersion, {
         id: versionId,
@@ -110,7 +180,7 @@ export class Stage {
         createdAt: new Date(),
         createdBy: user,
       });
-      return requestRun(em, {
+      const runId = await requestRun(em, {
         workspaceId: workspace,
         studyId: study,
         scenarioId: scenario,
@@ -119,8 +189,31 @@ export class Stage {
         modelVersion: MODEL_VERSION,
         requestedById: user,
       });
+      const queued = { runId, workspaceId: workspace };
+      await beforeCommit(queued);
+      return queued;
     });
-    return { runId, workspaceId: workspace };
+    return job;
+  }
+
+  messagesOf(runId: string): Promise<OutboxMessage[]> {
+    return withWorkspace(this.orm.em, this.ids.workspace, (em) => em.find(OutboxMessage, { runId }));
+  }
+
+  /** Waits until a session of this database waits for another's lock. */
+  async untilBlocked(): Promise<void> {
+    const admin = new pg.Client({ connectionString: this.database.adminUrl });
+    await admin.connect();
+    try {
+      for (;;) {
+        const blocked = await admin.query(
+          'select 1 from pg_stat_activity where datname = current_database() and cardinality(pg_blocking_pids(pid)) > 0',
+        );
+        if ((blocked.rowCount ?? 0) > 0) return;
+      }
+    } finally {
+      await admin.end();
+    }
   }
 
   run(runId: string): Promise<RunRow> {
@@ -155,6 +248,7 @@ export class Stage {
 
   async close(): Promise<void> {
     await Promise.all([...this.listeners].map((listener) => listener.close()));
+    for (const hand of this.hands) await hand.close(true);
     for (const app of this.workers) await app.close();
     await this.orm.close();
     await this.database.drop();

@@ -12,6 +12,11 @@ export class RunSignalsS extends Migration {
     this.addSql(`
       create function tell_run_changed() returns trigger language plpgsql as $$
       begin
+        -- A sign of life without news is no news.
+        if tg_op = 'UPDATE' and (new.state, new.progress, new.failure, new.cancel_requested)
+          is not distinct from (old.state, old.progress, old.failure, old.cancel_requested) then
+          return null;
+        end if;
         perform pg_notify('${RUNS_CHANNEL}', json_build_object(
           'workspaceId', new.workspace_id, 'studyId', new.study_id, 'runId', new.id)::text);
         return null;

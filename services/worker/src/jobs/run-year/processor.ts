@@ -98,6 +98,10 @@ export class RunYearProcessor extends WorkerHost implements OnApplicationBootstr
       });
       await progress.close();
       const stored = await this.inWorkspace(job, (em) => storeResult(em, claim, job.workspaceId, outcome));
+      this.logger.log(
+        { runId: job.runId, stored, engineMs: Math.round(outcome.engineMs) },
+        'A run is through',
+      );
       if (stored === 'cancelled') throw new UnrecoverableError('The run was cancelled.');
       return stored;
     } catch (error) {
@@ -115,6 +119,7 @@ export class RunYearProcessor extends WorkerHost implements OnApplicationBootstr
 
   private async fail(job: RunYearJob, claim: RunClaim, sentence: string): Promise<never> {
     await this.inWorkspace(job, (em) => recordFailure(em, claim, sentence));
+    this.logger.log({ runId: job.runId, sentence }, 'A run failed');
     throw new UnrecoverableError(sentence);
   }
 
