@@ -1,6 +1,7 @@
 import {
   Button,
   makeStyles,
+  mergeClasses,
   Menu,
   MenuDivider,
   MenuGroup,
@@ -29,6 +30,8 @@ const useStyles = makeStyles({
   },
   cut: { overflow: 'hidden', textOverflow: 'ellipsis', whiteSpace: 'nowrap' },
   workspace: { fontWeight: tokens.fontWeightBold },
+  // On a phone the role stands alone; the rest is in the menu.
+  wide: { '@media (max-width: 639px)': { display: 'none' } },
   role: { color: tokens.colorNeutralForeground3, fontWeight: tokens.fontWeightRegular },
   person: { padding: '8px 12px', maxWidth: '280px', overflowWrap: 'anywhere' },
   mail: { color: tokens.colorNeutralForeground3, fontSize: tokens.fontSizeBase200 },
@@ -61,16 +64,22 @@ export function AccountMenu({ me }: { me: Me }) {
           iconPosition="after"
         >
           <span className={styles.words}>
-            <span className={`${styles.cut} ${styles.workspace}`}>{me.workspace.name}</span>
-            <span className={`${styles.cut} ${styles.role}`}>
-              {me.user.name} · {ROLE_LABELS[me.role]}
+            <span className={mergeClasses(styles.cut, styles.workspace, styles.wide)}>
+              {me.workspace.name}
+            </span>
+            <span className={mergeClasses(styles.cut, styles.role)}>
+              <span className={styles.wide}>{me.user.name} · </span>
+              {ROLE_LABELS[me.role]}
             </span>
           </span>
         </Button>
       </MenuTrigger>
       <MenuPopover>
         <div className={styles.person}>
-          {me.user.name}
+          <strong>{me.workspace.name}</strong>
+          <div>
+            {me.user.name}, {ROLE_LABELS[me.role]}
+          </div>
           <div className={styles.mail}>{me.user.email}</div>
         </div>
         <MenuDivider />

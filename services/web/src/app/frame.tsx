@@ -45,6 +45,16 @@ const useStyles = makeStyles({
     color: tokens.colorNeutralForeground1,
     textDecorationLine: 'none',
   },
+  // On a phone the mark stands alone; its name stays for screen readers.
+  brandName: {
+    '@media (max-width: 479px)': {
+      position: 'absolute',
+      width: '1px',
+      height: '1px',
+      overflow: 'hidden',
+      clipPath: 'inset(50%)',
+    },
+  },
   nav: { display: 'flex', alignItems: 'stretch', gap: '4px' },
   link: {
     display: 'flex',
@@ -102,7 +112,7 @@ export default function Frame() {
       <header className={styles.bar}>
         <NavLink to="/studies" className={styles.brand} end>
           <img src="/icon.svg" alt="" width={24} height={24} />
-          Noonwell
+          <span className={styles.brandName}>Noonwell</span>
         </NavLink>
         <nav className={styles.nav} aria-label="Main">
           <NavLink to="/studies" className={styles.link}>

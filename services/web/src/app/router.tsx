@@ -18,7 +18,7 @@ export const routes: RouteObject[] = [
     // Who is signed in is known after the first load; later changes come through the session store.
     shouldRevalidate: () => false,
     children: [
-      { index: true, loader: () => redirect('/studies') },
+      { index: true, Component: HydrateFallback, loader: () => redirect('/studies') },
       {
         path: 'sign-in',
         loader: requireSignedOut,

@@ -14,7 +14,13 @@ import {
   DocumentArrowDownRegular,
   MoreHorizontalRegular,
 } from '@fluentui/react-icons';
-import { fieldRegistry, receiverSchema, type ScenarioView, type StudyView } from '@noonwell/schema';
+import {
+  fieldRegistry,
+  MOST_SCENARIOS,
+  receiverSchema,
+  type ScenarioView,
+  type StudyView,
+} from '@noonwell/schema';
 import { useMutation } from '@tanstack/react-query';
 import { useState } from 'react';
 import { useNavigate } from 'react-router-dom';
@@ -39,6 +45,7 @@ const useStyles = makeStyles({
 
 /** The scenarios of a study with their newest results, in the order of their colours. */
 export function ScenarioSection({ study }: { study: StudyView }) {
+  const styles = useStyles();
   const navigate = useNavigate();
   const [adding, setAdding] = useState(false);
   const [doomed, setDoomed] = useState<ScenarioView | null>(null);
@@ -56,7 +63,8 @@ export function ScenarioSection({ study }: { study: StudyView }) {
     remove.reset();
     setDoomed(scenario);
   });
-  const addButton = study.mayWrite && (
+  const full = study.scenarios.length >= MOST_SCENARIOS;
+  const addButton = study.mayWrite && !full && (
     <Button
       icon={<AddRegular />}
       onClick={() => {
@@ -83,6 +91,11 @@ export function ScenarioSection({ study }: { study: StudyView }) {
           rows={study.scenarios}
           rowKey={({ id }) => id}
         />
+      )}
+      {study.mayWrite && full && (
+        <p className={styles.base}>
+          A study holds at most {MOST_SCENARIOS} scenarios: so many stand side by side.
+        </p>
       )}
       {adding && (
         <NewScenarioDialog

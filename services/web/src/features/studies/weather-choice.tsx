@@ -151,6 +151,7 @@ function PointAtYear({ study, years }: { study: StudyView; years: readonly Weath
 }
 
 function yearText(year: WeatherYearView): string {
-  const mark = year.synthetic ? ' (synthetic)' : '';
+  // The names of the demo's years say it already.
+  const mark = year.synthetic && !/synthetic/i.test(year.name) ? ' (synthetic)' : '';
   return `${year.name}${mark}, DNI ${formatQuantity(year.summary.dniKwhM2, 'kWh/m²')}`;
 }

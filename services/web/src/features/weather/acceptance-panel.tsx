@@ -8,6 +8,8 @@ import {
   MessageBarTitle,
   ProgressBar,
 } from '@fluentui/react-components';
+import type { WeatherYearView } from '@noonwell/schema';
+import { useEffect, useRef } from 'react';
 import { ApiProblem } from '../../shared/api/problem.js';
 import { ErrorState } from '../../shared/components/error-state.js';
 import { LinkButton } from '../../shared/components/router-link.js';
@@ -21,7 +23,7 @@ import { WeatherPreviewPanel } from './weather-preview.js';
 
 const useStyles = makeStyles({
   root: { display: 'grid', gap: '16px', gridTemplateColumns: 'minmax(0, 1fr)' },
-  body: { whiteSpace: 'normal', paddingBlock: '8px', overflowWrap: 'anywhere' },
+  body: { whiteSpace: 'normal', paddingBottom: '8px', overflowWrap: 'anywhere' },
 });
 
 /** From a file to a weather year: drop, look at what was read, accept. */
@@ -69,7 +71,7 @@ function Progress({ state, onStop }: { state: Acceptance; onStop: () => void }) 
 function ProgressLine({ label, fraction }: { label: string; fraction?: number }) {
   return (
     <Field
-      label={fraction === undefined ? label : `${label}: ${formatFixed(fraction * 100)}\u202f%`}
+      label={fraction === undefined ? label : `${label}: ${formatFixed(fraction * 100)}\u00a0%`}
       validationState="none"
     >
       <ProgressBar thickness="large" {...(fraction === undefined ? {} : { value: fraction })} />
@@ -84,7 +86,6 @@ interface OutcomeProps {
 }
 
 function Outcome({ state, onSend, onReset }: OutcomeProps) {
-  const styles = useStyles();
   switch (state.step) {
     case 'none':
     case 'reading':
@@ -94,18 +95,7 @@ function Outcome({ state, onSend, onReset }: OutcomeProps) {
         <ErrorState what={`"${state.file.name}" could not be read in this browser.`} error={state.error} />
       );
     case 'accepted':
-      return (
-        <MessageBar intent="success" layout="multiline" role="status">
-          <MessageBarBody className={styles.body}>
-            <MessageBarTitle>"{state.year.name}" is a weather year of this workspace now.</MessageBarTitle>
-            Open a study to point it at this year.
-          </MessageBarBody>
-          <MessageBarActions>
-            <LinkButton to={`/weather/${state.year.id}`}>Look at it</LinkButton>
-            <LinkButton to="/studies">Go to the studies</LinkButton>
-          </MessageBarActions>
-        </MessageBar>
-      );
+      return <Accepted year={state.year} />;
     case 'read':
     case 'sending': {
       const { preview, file } = state;
@@ -130,4 +120,25 @@ function Outcome({ state, onSend, onReset }: OutcomeProps) {
       );
     }
   }
+}
+
+/** The form is gone with the button that had the focus: the focus comes here. */
+function Accepted({ year }: { year: WeatherYearView }) {
+  const styles = useStyles();
+  const bar = useRef<HTMLDivElement>(null);
+  useEffect(() => {
+    bar.current?.focus();
+  }, []);
+  return (
+    <MessageBar ref={bar} tabIndex={-1} intent="success" layout="multiline" role="status">
+      <MessageBarBody className={styles.body}>
+        <MessageBarTitle>"{year.name}" is a weather year of this workspace now.</MessageBarTitle>
+        Open a study to point it at this year.
+      </MessageBarBody>
+      <MessageBarActions>
+        <LinkButton to={`/weather/${year.id}`}>Look at it</LinkButton>
+        <LinkButton to="/studies">Go to the studies</LinkButton>
+      </MessageBarActions>
+    </MessageBar>
+  );
 }

@@ -42,7 +42,14 @@ const columns: readonly TableColumn<Month>[] = [
 const layout: Partial<Layout> = {
   barmode: 'group',
   yaxis: { title: { text: 'kWh/m² a month' }, rangemode: 'tozero' },
-  yaxis2: { title: { text: 'Air, °C' }, overlaying: 'y', side: 'right', showgrid: false },
+  yaxis2: {
+    title: { text: 'Air, °C' },
+    overlaying: 'y',
+    side: 'right',
+    showgrid: false,
+    tickmode: 'auto',
+    nticks: 5,
+  },
   margin: { r: 56 },
 };
 
@@ -84,7 +91,7 @@ export function MonthlyChart({ summary, height = 280 }: { summary: WeatherSummar
       {
         type: 'scatter',
         mode: 'lines+markers',
-        name: 'Air temperature',
+        name: 'Air',
         x: [...MONTH_NAMES],
         y: months.map(({ dryBulb }) => dryBulb),
         yaxis: 'y2',

@@ -5,7 +5,7 @@ import { formatCount, formatPlural, NO_VALUE } from '../../shared/format/number.
 
 const useStyles = makeStyles({
   root: { display: 'grid', gap: '12px', gridTemplateColumns: 'minmax(0, 1fr)' },
-  body: { whiteSpace: 'normal', paddingBlock: '8px', overflowWrap: 'anywhere' },
+  body: { whiteSpace: 'normal', paddingBottom: '8px', overflowWrap: 'anywhere' },
   reason: { minWidth: '220px', display: 'block' },
 });
 

@@ -6,7 +6,7 @@ const TENTHS = 1;
 
 /** The sums and means that say whether a year can be right. */
 export function weatherFigures(summary: WeatherSummary): readonly Figure[] {
-  const celsius = (value: number) => `${formatFixed(value, TENTHS)}\u202f°C`;
+  const celsius = (value: number) => `${formatFixed(value, TENTHS)}\u00a0°C`;
   return [
     { name: 'Beam, facing the sun (DNI)', value: sum(summary.dniKwhM2) },
     { name: 'All light, flat (GHI)', value: sum(summary.ghiKwhM2) },
@@ -17,12 +17,12 @@ export function weatherFigures(summary: WeatherSummary): readonly Figure[] {
     { name: 'Wind, mean', value: formatQuantity(summary.windMeanMs, 'm/s') },
     {
       name: 'Records',
-      value: `${formatCount(summary.records)} of ${formatCount(summary.intervalMinutes)}\u202fmin`,
+      value: `${formatCount(summary.records)} of ${formatCount(summary.intervalMinutes)}\u00a0min`,
     },
     { name: 'Filled or clipped records', value: formatCount(summary.flaggedRecords) },
   ];
 }
 
 function sum(kwhM2: number): string {
-  return `${formatCount(kwhM2)}\u202fkWh/m²`;
+  return `${formatCount(kwhM2)}\u00a0kWh/m²`;
 }

@@ -21,7 +21,7 @@ const useStyles = makeStyles({
   root: { display: 'grid', gap: '16px', gridTemplateColumns: 'minmax(0, 1fr)' },
   form: { display: 'flex', flexWrap: 'wrap', gap: '8px', alignItems: 'end' },
   field: { flex: '1 1 240px', maxWidth: '480px' },
-  body: { whiteSpace: 'normal', paddingBlock: '8px' },
+  body: { whiteSpace: 'normal', paddingBottom: '8px' },
   list: { margin: '4px 0 0', paddingInlineStart: '20px' },
 });
 
@@ -57,7 +57,7 @@ export function WeatherPreviewPanel({ preview, busy, error, onAccept, onDiscard 
         figures={[
           { name: 'Place', value: header.placeName === '' ? 'Not named' : header.placeName },
           { name: 'Coordinates', value: formatCoordinates(latitudeDeg, longitudeDeg) },
-          { name: 'Altitude', value: `${formatFixed(altitudeM)}\u202fm` },
+          { name: 'Altitude', value: `${formatFixed(altitudeM)}\u00a0m` },
           { name: 'Clock', value: formatUtcOffset(utcOffsetHours) },
           { name: 'Origin of the data', value: header.source === '' ? 'Not named' : header.source },
         ]}

@@ -5,6 +5,7 @@ import {
   MessageBarBody,
   MessageBarTitle,
   Spinner,
+  tokens,
 } from '@fluentui/react-components';
 import { ArrowDownloadRegular, DeleteRegular } from '@fluentui/react-icons';
 import type { WeatherYearView } from '@noonwell/schema';
@@ -30,7 +31,12 @@ import { weatherFigures } from './weather-figures.js';
 import { BeamYearMap } from './year-map.js';
 
 const useStyles = makeStyles({
-  body: { whiteSpace: 'normal', paddingBlock: '8px' },
+  body: { whiteSpace: 'normal', paddingBottom: '8px' },
+  hash: {
+    fontFamily: tokens.fontFamilyMonospace,
+    fontSize: tokens.fontSizeBase100,
+    fontWeight: tokens.fontWeightRegular,
+  },
   list: { margin: '4px 0 0', paddingInlineStart: '20px' },
 });
 
@@ -63,7 +69,7 @@ function LoadedYear({ year }: { year: WeatherYearView }) {
         above={<RouterLink to="/weather">Weather</RouterLink>}
         below={
           <>
-            {formatCoordinates(year.latitudeDeg, year.longitudeDeg)}, {formatFixed(year.altitudeM)}&#x202f;m,{' '}
+            {formatCoordinates(year.latitudeDeg, year.longitudeDeg)}, {formatFixed(year.altitudeM)}&nbsp;m,{' '}
             {formatUtcOffset(year.utcOffsetHours)} {year.synthetic && <SyntheticBadge />}
           </>
         }
@@ -108,7 +114,7 @@ function LoadedYear({ year }: { year: WeatherYearView }) {
             { name: 'Name', value: year.originalFileName },
             { name: 'Format', value: year.format.toUpperCase() },
             { name: 'Size', value: formatBytes(year.originalBytes) },
-            { name: 'SHA-256', value: year.originalSha256 },
+            { name: 'SHA-256', value: <span className={styles.hash}>{year.originalSha256}</span> },
             { name: 'Added', value: `${formatInstant(year.createdAt)} by ${year.createdByName}` },
           ]}
         />

@@ -11,7 +11,7 @@ import type { ReactNode } from 'react';
 import { ApiProblem, describeError } from '../api/problem.js';
 
 const useStyles = makeStyles({
-  body: { whiteSpace: 'normal', paddingBlock: '8px' },
+  body: { whiteSpace: 'normal', paddingBottom: '8px', overflowWrap: 'anywhere' },
   line: { display: 'block' },
   reference: { fontFamily: tokens.fontFamilyMonospace, overflowWrap: 'anywhere' },
   places: { margin: '4px 0 0', paddingInlineStart: '20px' },

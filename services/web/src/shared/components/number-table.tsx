@@ -47,6 +47,7 @@ const useStyles = makeStyles({
     fontWeight: tokens.fontWeightRegular,
     verticalAlign: 'top',
   },
+  text: { minWidth: '96px' },
   number: { textAlign: 'end', fontVariantNumeric: 'tabular-nums lining-nums', whiteSpace: 'nowrap' },
   unit: { display: 'block', color: tokens.colorNeutralForeground3, fontWeight: tokens.fontWeightRegular },
   strong: { fontWeight: tokens.fontWeightBold, borderTop: `2px solid ${tokens.colorNeutralStroke1}` },
@@ -102,7 +103,7 @@ export function NumberTable<Row>({
               <th
                 key={key}
                 scope="col"
-                className={mergeClasses(styles.head, kind === 'number' && styles.number)}
+                className={mergeClasses(styles.head, kind === 'number' ? styles.number : styles.text)}
               >
                 {heading}
                 {unit !== undefined && unit !== '1' && unit !== '' && (
@@ -118,7 +119,7 @@ export function NumberTable<Row>({
               {columns.map(({ key, kind, cell }, index) => {
                 const className = mergeClasses(
                   styles.cell,
-                  kind === 'number' && styles.number,
+                  kind === 'number' ? styles.number : styles.text,
                   isTotal?.(row) === true && styles.strong,
                 );
                 return index === 0 ? (

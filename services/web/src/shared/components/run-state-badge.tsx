@@ -23,7 +23,7 @@ export function RunStateBadge({ state, progress }: RunStateBadgeProps) {
   if (state === null) return <Badge appearance="outline">Not run yet</Badge>;
   const { label, color, appearance } = looks[state];
   const percent =
-    state === 'running' && progress !== undefined ? ` ${Math.floor(progress * 100)}\u202f%` : '';
+    state === 'running' && progress !== undefined ? ` ${Math.floor(progress * 100)}\u00a0%` : '';
   return (
     <Badge color={color} appearance={appearance}>
       {label}

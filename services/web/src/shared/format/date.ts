@@ -26,7 +26,7 @@ export function formatWeatherDay(localMs: number): string {
 /** A length of time in words: "0.4 s", "12 s", "3 min". @param ms [ms] */
 export function formatDurationMs(ms: number | null | undefined): string {
   if (ms == null) return NO_VALUE;
-  if (ms < 9_950) return `${(ms / 1000).toFixed(1)}\u202fs`;
-  if (ms < 120_000) return `${Math.round(ms / 1000)}\u202fs`;
-  return `${Math.round(ms / 60_000)}\u202fmin`;
+  if (ms < 9_950) return `${(ms / 1000).toFixed(1)}\u00a0s`;
+  if (ms < 120_000) return `${Math.round(ms / 1000)}\u00a0s`;
+  return `${Math.round(ms / 60_000)}\u00a0min`;
 }

@@ -30,10 +30,10 @@ it('never writes a minus before nothing', () => {
 });
 
 it('keeps energy in kWh and its multiples, power in W and its multiples', () => {
-  expect(formatEnergyKwh(812.4)).toBe('812\u202fkWh');
-  expect(formatEnergyKwh(123_456)).toBe('123\u202fMWh');
-  expect(formatPowerW(812.4)).toBe('812\u202fW');
-  expect(formatPowerW(12_345)).toBe('12.3\u202fkW');
+  expect(formatEnergyKwh(812.4)).toBe('812\u00a0kWh');
+  expect(formatEnergyKwh(123_456)).toBe('123\u00a0MWh');
+  expect(formatPowerW(812.4)).toBe('812\u00a0W');
+  expect(formatPowerW(12_345)).toBe('12.3\u00a0kW');
 });
 
 it('chooses one unit for a whole table by its largest value', () => {
@@ -44,23 +44,23 @@ it('chooses one unit for a whole table by its largest value', () => {
 it('leaves the unit of a pure number out and says the sign of a difference', () => {
   expect(formatQuantity(0.95, '1')).toBe('0.950');
   expect(formatQuantity(44.7, '°')).toBe('44.7°');
-  expect(formatShare(0.0834)).toBe('8.34\u202f%');
+  expect(formatShare(0.0834)).toBe('8.34\u00a0%');
   expect(formatSigned(1234)).toBe('+1,230');
   expect(formatSigned(-0.5)).toBe('−0.500');
 });
 
 it('names places and clocks', () => {
-  expect(formatCoordinates(34.85, -116.8)).toBe('34.85°\u202fN, 116.80°\u202fW');
+  expect(formatCoordinates(34.85, -116.8)).toBe('34.85°\u00a0N, 116.80°\u00a0W');
   expect(formatUtcOffset(-8)).toBe('UTC−8');
   expect(formatUtcOffset(5.5)).toBe('UTC+5:30');
   expect(formatUtcOffset(-3.5)).toBe('UTC−3:30');
-  expect(formatBytes(1_720_000)).toBe('1.72\u202fMB');
+  expect(formatBytes(1_720_000)).toBe('1.72\u00a0MB');
 });
 
 it('names months and lengths of time', () => {
   expect(MONTH_NAMES[0]).toBe('Jan');
   expect(MONTH_NAMES).toHaveLength(12);
-  expect(formatDurationMs(140)).toBe('0.1\u202fs');
-  expect(formatDurationMs(9_960)).toBe('10\u202fs');
-  expect(formatDurationMs(180_000)).toBe('3\u202fmin');
+  expect(formatDurationMs(140)).toBe('0.1\u00a0s');
+  expect(formatDurationMs(9_960)).toBe('10\u00a0s');
+  expect(formatDurationMs(180_000)).toBe('3\u00a0min');
 });

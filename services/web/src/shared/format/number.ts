@@ -3,7 +3,7 @@ import { LOCALE } from './locale.js';
 /** Stands where a figure does not exist (no cells, no run yet). */
 export const NO_VALUE = '–';
 /** Between a number and its unit: they never part at a line end. */
-const NARROW_SPACE = '\u202f';
+const UNIT_SPACE = '\u00a0';
 
 const significantFormats = new Map<number, Intl.NumberFormat>();
 const fixedFormats = new Map<number, Intl.NumberFormat>();
@@ -45,7 +45,7 @@ export function formatFixed(value: number | null | undefined, decimals = 0): str
 export function formatQuantity(value: number | null | undefined, unit: string, digits = 3): string {
   const text = formatSignificant(value, digits);
   if (text === NO_VALUE || unit === '1' || unit === '') return text;
-  return unit === '°' ? `${text}${unit}` : `${text}${NARROW_SPACE}${unit}`;
+  return unit === '°' ? `${text}${unit}` : `${text}${UNIT_SPACE}${unit}`;
 }
 
 /** A share as per cent: 0.0834 → 8.34 %. */
