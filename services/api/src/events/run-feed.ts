@@ -13,8 +13,6 @@ import { InjectSettings, type Settings } from '../config/settings';
 
 export interface Receiver {
   receive(event: RunEvent): void;
-  /** The API is going down. */
-  end(): void;
 }
 
 /** What is followed of one study, once for all who watch it. */
@@ -63,9 +61,6 @@ export class RunFeed implements OnApplicationBootstrap, OnModuleDestroy {
   }
 
   async onModuleDestroy(): Promise<void> {
-    for (const { receivers } of this.followed.values()) {
-      for (const receiver of receivers) receiver.end();
-    }
     await this.listener?.close();
   }
 

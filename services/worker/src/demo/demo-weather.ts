@@ -38,7 +38,7 @@ export function demoWeather(place: string): DemoWeather {
     );
   }
   return {
-    name: `${descriptor.name} (synthetic)`,
+    name: descriptor.name,
     fileName,
     file,
     read,

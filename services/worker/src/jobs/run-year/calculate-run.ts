@@ -73,7 +73,9 @@ function inSentences<Result>(work: () => Result): Result {
   } catch (error) {
     if (error instanceof RunError) throw new RunRefused(`The run stopped. ${sentence(error.message)}`);
     if (error instanceof DomainError) {
-      throw new RunRefused(`The run cannot start: ${sentence(error.message)} Change the scenario there.`);
+      throw new RunRefused(
+        `The run cannot start: ${sentence(error.message)} Correct it in the scenario or the weather year.`,
+      );
     }
     if (error instanceof WeatherDecodeError) {
       throw new RunRefused(
