@@ -33,6 +33,7 @@ export class AppModule {
           driver: PostgreSqlDriver,
           // Each service opens its own transaction, with the workspace set: there is no shared manager to leak.
           registerRequestContext: false,
+          forRoutesPath: '{*path}',
         }),
         ThrottlerModule.forRoot(throttlerOptions(settings)),
         AuthModule,

@@ -1,3 +1,4 @@
+import { RequestMethod } from '@nestjs/common';
 import type { IncomingMessage } from 'node:http';
 import { randomUUID } from 'node:crypto';
 import type { Params } from 'nestjs-pino';
@@ -6,6 +7,8 @@ import type { Settings } from '../config/settings';
 /** One line a request, without headers, query or body: that is where secrets travel. */
 export function loggerOptions({ logLevel }: Settings): Params {
   return {
+    // Nest's default path is in a syntax that express 5 no longer takes.
+    forRoutes: [{ path: '{*path}', method: RequestMethod.ALL }],
     pinoHttp: {
       level: logLevel,
       genReqId: () => randomUUID(),
