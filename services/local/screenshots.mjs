@@ -21,15 +21,17 @@ try {
       ? await startThrowAwayApp()
       : { address: values.url, stop: () => Promise.resolve() };
   try {
-    process.exitCode = await show(process.execPath, [
-      '--conditions=@noonwell/source',
-      '--import',
-      'tsx',
-      join(root, 'services/local/lib/photograph.mjs'),
-      app.address,
-      chromium,
-      join(root, 'screenshots'),
-    ]);
+    process.exitCode = await show(
+      process.execPath,
+      [
+        '--conditions=@noonwell/source',
+        '--import',
+        'tsx',
+        join(root, 'services/web/e2e/screenshots/photograph.ts'),
+        join(root, 'screenshots'),
+      ],
+      { ...process.env, NOONWELL_E2E_URL: app.address, NOONWELL_CHROMIUM: chromium },
+    );
   } finally {
     await app.stop();
   }

@@ -7,7 +7,7 @@ export default mergeConfig(sharedConfig, {
   test: {
     name: 'web',
     environment: 'jsdom',
-    include: ['src/**/*.test.ts', 'src/**/*.test.tsx'],
+    include: ['src/**/*.test.ts', 'src/**/*.test.tsx', 'e2e/**/*.test.ts'],
     deps: {
       optimizer: {
         // Fluent is hundreds of small files: bundling it once makes each test file start in a second.

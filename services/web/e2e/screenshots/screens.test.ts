@@ -1,7 +1,8 @@
+import type { RouteObject } from 'react-router-dom';
 import { describe, expect, it } from 'vitest';
-import { addressOf, nameOf, patternsOf } from './screens.mjs';
+import { addressOf, nameOf, patternsOf } from './screens.js';
 
-const routes = [
+const routes: RouteObject[] = [
   {
     children: [
       { index: true },
