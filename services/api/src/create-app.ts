@@ -22,6 +22,17 @@ const OPTIONS: NestApplicationOptions = { bufferLogs: true, bodyParser: false, a
  */
 export async function createApp(settings: Settings): Promise<NestExpressApplication> {
   const app = await NestFactory.create<NestExpressApplication>(AppModule.with(settings), OPTIONS);
+  try {
+    await configure(app, settings);
+    return app;
+  } catch (error) {
+    // Else its connections would keep the process alive.
+    await app.close();
+    throw error;
+  }
+}
+
+async function configure(app: NestExpressApplication, settings: Settings): Promise<void> {
   app.useLogger(app.get(Logger));
   app.flushLogs();
   app.enableShutdownHooks();
@@ -38,8 +49,6 @@ export async function createApp(settings: Settings): Promise<NestExpressApplicat
   await app.init();
   const unlisted = unlistedRoutes(app);
   if (unlisted.length > 0) {
-    await app.close();
     throw new Error(`These routes are not listed in ROUTES of @noonwell/schema: ${unlisted.join(', ')}`);
   }
-  return app;
 }

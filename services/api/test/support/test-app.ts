@@ -26,6 +26,9 @@ export async function startTestApp(change: Partial<Settings> = {}): Promise<Test
     ...settings,
     limits: { signInsPerAddress: many, signInsPerAccount: many, costlyPerPerson: many },
     ...change,
+  }).catch(async (error: unknown) => {
+    await database.drop();
+    throw error;
   });
   await app.listen(0, '127.0.0.1');
   const address = await app.getUrl();
