@@ -2,7 +2,6 @@ import { recordCalendar, type RecordCalendar } from '../calendar.js';
 import { createDispatch, dispatchPower } from '../electricity/dispatch.js';
 import { siteUseW } from '../electricity/use.js';
 import { DomainError, RunError } from '../errors.js';
-import { ACCOUNT_INDEX } from '../ledger/accounts.js';
 import { RESIDUAL_LIMIT, ROUND_OFF, findImbalance, findImbalances } from '../ledger/balance.js';
 import { LEDGER_INDEX } from '../ledger/lines.js';
 import type { Load } from '../load/load.js';
@@ -22,8 +21,10 @@ import { createTracker, type Tracker } from '../tracker/tracker.js';
 import type { WeatherYear } from '../weather-year.js';
 import { requireWeather, stepsPerRecord } from './check-input.js';
 import { DishLedger } from './dish-ledger.js';
+import { keepLoop, keepPower, keepReceiver, keepStoreAndLoad, type PowerUse } from './keep-ledger.js';
 import { Recorder } from './recorder.js';
 import type { RunResult } from './result.js';
+import { Watch } from './watch.js';
 
 /** A run that goes on record by record, so that its caller can report progress and stop it. */
 export interface YearRun {
@@ -80,24 +81,18 @@ class Simulation implements YearRun {
   private readonly load: Load;
   private readonly siteUseW: Float64Array;
   private readonly dispatch = createDispatch();
+  private readonly use: PowerUse = { siteW: 0, pumpW: 0, trackerW: 0 };
   private readonly recorder: Recorder;
+  private readonly watch: Watch;
 
   private readonly suns: SunPosition[];
   private readonly sunlit: Uint8Array;
   private readonly stepDniWm2: Float64Array;
-  private readonly layersC: Float64Array;
   private readonly stateSeconds = new Float64Array(TRACKER_STATES.length);
-  private readonly record = { trackingS: 0, flowKg: 0, faceC: 0, cellC: 0, outletC: 0 };
 
   private storeFull = false;
   private tankEnergyJ: number;
   private tankEnergyMaxJ = 0;
-  private pumpSeconds = 0;
-  private pipeFreezeSeconds = 0;
-  private faceMaxC = -Infinity;
-  private cellMaxC = -Infinity;
-  private tankTopMaxC = -Infinity;
-  private outletMaxC = 0;
 
   constructor(
     private readonly machine: Machine,
@@ -126,7 +121,7 @@ class Simulation implements YearRun {
     this.suns = Array.from({ length: this.steps }, emptySunPosition);
     this.sunlit = new Uint8Array(this.steps);
     this.stepDniWm2 = new Float64Array(this.steps);
-    this.layersC = new Float64Array(this.tank.layers);
+    this.watch = new Watch(this.tank.layers);
   }
 
   get accountsJ(): Float64Array {
@@ -154,7 +149,7 @@ class Simulation implements YearRun {
     tankStep.surroundingsC = weather.dryBulbC[record]!;
     this.load.ask(record, tankStep);
     this.placeSun(record);
-    this.beginRecord();
+    this.watch.beginRecord();
 
     for (let step = 0; step < this.steps; step++) this.runStep(record, step);
     this.endRecord(record);
@@ -201,10 +196,11 @@ class Simulation implements YearRun {
       const tracking = state === TRACKER_STATE_INDEX.tracking;
       this.stateSeconds[state]! += dtS;
       this.keepDish(state, beamW * dtS);
-      this.keepReceiverAndLoop();
+      keepReceiver(this.recorder.recordJ, receiverStep);
+      keepLoop(this.recorder.recordJ, this.loop, dtS);
       this.chargeAndDraw();
       this.usePower(this.siteUseW[record]!, tracking);
-      this.watch(tracking);
+      this.watch.see(receiverStep, this.loop, tracking);
     }
   }
 
@@ -246,109 +242,33 @@ class Simulation implements YearRun {
     else this.dishLedger.addTracking(ledger, beamJ);
   }
 
-  private keepReceiverAndLoop(): void {
-    const ledger = this.recorder.recordJ;
-    const { receiverStep: receiver, loop } = this;
-    const dtS = receiver.dtS;
-    ledger[LEDGER_INDEX.convection]! += receiver.convectionW * dtS;
-    ledger[LEDGER_INDEX.radiation]! += receiver.radiationW * dtS;
-    ledger[LEDGER_INDEX.backLoss]! += receiver.backLossW * dtS;
-    ledger[LEDGER_INDEX.receiverStored]! += receiver.storedW * dtS;
-    ledger[LEDGER_INDEX.powerDc]! += receiver.powerDcW * dtS;
-    ledger[LEDGER_INDEX.heatToFluid]! += receiver.heatToFluidW * dtS;
-    ledger[LEDGER_INDEX.returnPipeLoss]! += loop.toReceiver.lossW * dtS;
-    ledger[LEDGER_INDEX.supplyPipeLoss]! += loop.toTank.lossW * dtS;
-    ledger[LEDGER_INDEX.loopStored]! += (loop.toReceiver.storedW + loop.toTank.storedW) * dtS;
-    ledger[LEDGER_INDEX.heatToStore]! += loop.heatToStoreW * dtS;
-  }
-
   private chargeAndDraw(): void {
-    const ledger = this.recorder.recordJ;
     const { tankStep: step, tank, load } = this;
     step.chargeFlowKgS = this.loop.flowKgS;
     step.chargeEnthalpyRiseJkg = this.loop.enthalpyRiseJkg;
     tank.step(step);
     load.settle(step);
-    ledger[LEDGER_INDEX.shellLoss]! += step.shellLossJ;
-    ledger[LEDGER_INDEX.heatDelivered]! += step.heatDrawnJ;
-    ledger[LEDGER_INDEX.loadHeat]! += step.loadNeedJ;
-    ledger[LEDGER_INDEX.backupHeat]! += load.backupJ;
-    ledger[LEDGER_INDEX.unmetHeat]! += load.unmetJ;
-    ledger[ACCOUNT_INDEX.boilerFuel]! += load.fuelJ;
     const energyJ = tank.energyJ();
-    ledger[LEDGER_INDEX.storeStored]! += energyJ - this.tankEnergyJ;
+    keepStoreAndLoad(this.recorder.recordJ, step, energyJ - this.tankEnergyJ, load);
     this.tankEnergyJ = energyJ;
     this.tankEnergyMaxJ = Math.max(this.tankEnergyMaxJ, Math.abs(energyJ));
   }
 
   private usePower(siteW: number, tracking: boolean): void {
-    const ledger = this.recorder.recordJ;
-    const { dispatch, machine } = this;
-    const dtS = this.receiverStep.dtS;
-    const trackerW = machine.trackerPower.standbyW + (tracking ? machine.trackerPower.movingW : 0);
-    dispatchPower(
-      this.receiverStep.powerDcW,
-      this.receiver.inverter,
-      siteW + this.loop.pumpW + trackerW,
-      dispatch,
-    );
-    ledger[LEDGER_INDEX.siteUse]! += siteW * dtS;
-    ledger[LEDGER_INDEX.pumpUse]! += this.loop.pumpW * dtS;
-    ledger[LEDGER_INDEX.trackerUse]! += trackerW * dtS;
-    ledger[LEDGER_INDEX.inverterLoss]! += dispatch.inverterLossW * dtS;
-    ledger[LEDGER_INDEX.gridImport]! += dispatch.importW * dtS;
-    ledger[LEDGER_INDEX.gridExport]! += dispatch.exportW * dtS;
-    ledger[ACCOUNT_INDEX.powerAc]! += dispatch.acW * dtS;
-    ledger[ACCOUNT_INDEX.ownUse]! += dispatch.ownUseW * dtS;
-  }
-
-  private beginRecord(): void {
-    this.record.trackingS = 0;
-    this.record.flowKg = 0;
-    this.record.faceC = -Infinity;
-    this.record.cellC = -Infinity;
-    this.record.outletC = 0;
-  }
-
-  private watch(tracking: boolean): void {
-    const { record, receiverStep: receiver, loop } = this;
-    const dtS = receiver.dtS;
-    if (tracking) record.trackingS += dtS;
-    record.flowKg += loop.flowKgS * dtS;
-    record.faceC = Math.max(record.faceC, receiver.faceC);
-    record.cellC = Math.max(record.cellC, receiver.hottestC);
-    if (loop.flowKgS > 0) {
-      record.outletC = Math.max(record.outletC, receiver.outletC);
-      this.pumpSeconds += dtS;
-    }
-    if (Math.min(loop.toReceiver.nowC, loop.toTank.nowC) < 0) this.pipeFreezeSeconds += dtS;
+    const { dispatch, use, receiverStep, receiver } = this;
+    const { standbyW, movingW } = this.machine.trackerPower;
+    use.siteW = siteW;
+    use.pumpW = this.loop.pumpW;
+    use.trackerW = standbyW + (tracking ? movingW : 0);
+    dispatchPower(receiverStep.powerDcW, receiver.inverter, use.siteW + use.pumpW + use.trackerW, dispatch);
+    keepPower(this.recorder.recordJ, use, dispatch, receiverStep.dtS);
   }
 
   private endRecord(record: number): void {
-    const { recorder, weather, tank } = this;
     this.requireBalance(record);
-    recorder.close(record);
-
-    const { states, tankLayersC } = recorder.hourly;
-    states.dniWm2[record] = weather.dniWm2[record]!;
-    states.dryBulbC[record] = weather.dryBulbC[record]!;
-    states.windMs[record] = weather.windMs[record]!;
-    states.sunElevationDeg[record] = this.suns[this.steps >> 1]!.elevationRad / DEG;
-    states.trackingShare[record] = this.record.trackingS / this.intervalS;
-    states.flowKgS[record] = this.record.flowKg / this.intervalS;
-    states.faceC[record] = this.record.faceC;
-    states.cellC[record] = this.record.cellC;
-    states.outletC[record] = this.record.outletC;
-    states.tankTopC[record] = tank.topC;
-    states.tankBottomC[record] = tank.bottomC;
-    tank.temperaturesC(this.layersC);
-    for (let layer = 0; layer < this.layersC.length; layer++)
-      tankLayersC[layer]![record] = this.layersC[layer]!;
-
-    this.faceMaxC = Math.max(this.faceMaxC, this.record.faceC);
-    this.cellMaxC = Math.max(this.cellMaxC, this.record.cellC);
-    this.outletMaxC = Math.max(this.outletMaxC, this.record.outletC);
-    this.tankTopMaxC = Math.max(this.tankTopMaxC, tank.topC);
+    this.recorder.close(record);
+    const elevationDeg = this.suns[this.steps >> 1]!.elevationRad / DEG;
+    this.watch.endRecord(record, this.intervalS, this.weather, elevationDeg, this.tank, this.recorder.hourly);
   }
 
   /**
@@ -413,12 +333,12 @@ class Simulation implements YearRun {
       trackerSeconds: Object.fromEntries(
         TRACKER_STATES.map((state, index) => [state, this.stateSeconds[index]!]),
       ) as RunResult['trackerSeconds'],
-      pumpSeconds: this.pumpSeconds,
-      pipeFreezeSeconds: this.pipeFreezeSeconds,
-      faceMaxC: this.faceMaxC,
-      cellMaxC: this.receiver.hasCells ? this.cellMaxC : null,
-      tankTopMaxC: this.tankTopMaxC,
-      outletMaxC: this.outletMaxC,
+      pumpSeconds: this.watch.pumpSeconds,
+      pipeFreezeSeconds: this.watch.pipeFreezeSeconds,
+      faceMaxC: this.watch.faceMaxC,
+      cellMaxC: this.receiver.hasCells ? this.watch.cellMaxC : null,
+      tankTopMaxC: this.watch.tankTopMaxC,
+      outletMaxC: this.watch.outletMaxC,
       hourly: recorder.hourly,
     };
   }
