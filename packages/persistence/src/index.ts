@@ -13,6 +13,7 @@ export { RunRow } from './runs/run.entity.js';
 export { ScenarioVersion } from './studies/scenario-version.entity.js';
 export { ScenarioRow } from './studies/scenario.entity.js';
 export { Study } from './studies/study.entity.js';
+export { AppRoleError, requireAppRole } from './tenancy/app-role.js';
 export {
   setScope,
   withScope,

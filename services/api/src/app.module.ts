@@ -11,7 +11,7 @@ import { AuthModule } from './auth/auth.module';
 import { SETTINGS, type Settings } from './config/settings';
 import { EventsModule } from './events/events.module';
 import { throttlerOptions } from './http/limits';
-import { loggerOptions } from './http/logging';
+import { loggerOptions, type LogTarget } from './http/logging';
 import { ProblemFilter } from './http/problem.filter';
 import { StrictValidationPipe } from './http/strict-validation.pipe';
 import { MembersModule } from './members/members.module';
@@ -23,11 +23,11 @@ import { WeatherModule } from './weather/weather.module';
 @Global()
 @Module({})
 export class AppModule {
-  static with(settings: Settings): DynamicModule {
+  static with(settings: Settings, logTo: LogTarget): DynamicModule {
     return {
       module: AppModule,
       imports: [
-        LoggerModule.forRoot(loggerOptions(settings)),
+        LoggerModule.forRoot(loggerOptions(settings, logTo)),
         MikroOrmModule.forRoot({
           ...ormOptions({ databaseUrl: settings.databaseUrl }),
           driver: PostgreSqlDriver,

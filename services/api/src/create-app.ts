@@ -1,11 +1,14 @@
+import { EntityManager } from '@mikro-orm/postgresql';
 import type { NestApplicationOptions } from '@nestjs/common';
 import { NestFactory } from '@nestjs/core';
 import type { NestExpressApplication } from '@nestjs/platform-express';
+import { requireAppRole } from '@noonwell/persistence';
 import cookieParser from 'cookie-parser';
 import { Logger } from 'nestjs-pino';
 import { unlistedRoutes } from './access/unlisted-routes';
 import { AppModule } from './app.module';
 import type { Settings } from './config/settings';
+import type { LogTarget } from './http/logging';
 import { noStore, securityHeaders } from './http/security-headers';
 import { staticWeb } from './http/static-web';
 import { OpenApiDocument } from './meta/openapi';
@@ -18,10 +21,11 @@ const OPTIONS: NestApplicationOptions = { bufferLogs: true, bodyParser: false, a
 
 /**
  * The whole API, ready to listen.
+ * @throws AppRoleError when the database role can pass row-level security
  * @throws Error when a route is not listed in ROUTES: it would be refused to everybody
  */
-export async function createApp(settings: Settings): Promise<NestExpressApplication> {
-  const app = await NestFactory.create<NestExpressApplication>(AppModule.with(settings), OPTIONS);
+export async function createApp(settings: Settings, logTo?: LogTarget): Promise<NestExpressApplication> {
+  const app = await NestFactory.create<NestExpressApplication>(AppModule.with(settings, logTo), OPTIONS);
   try {
     await configure(app, settings);
     return app;
@@ -46,6 +50,7 @@ async function configure(app: NestExpressApplication, settings: Settings): Promi
   app.useBodyParser('json', { limit: JSON_LIMIT, strict: true });
   if (settings.webDist !== undefined) app.use(staticWeb(settings.webDist));
   app.get(OpenApiDocument).make(app);
+  await requireAppRole(app.get(EntityManager));
   await app.init();
   const unlisted = unlistedRoutes(app);
   if (unlisted.length > 0) {

@@ -11,6 +11,7 @@ import type { Request, Response } from 'express';
 import { ZodSerializationException, ZodValidationException } from 'nestjs-zod';
 import { STATUS_CODES } from 'node:http';
 import { z } from 'zod';
+import { loggable } from './loggable';
 import { ProblemException, type ProblemErrors } from './problem';
 
 /** What a request's own errors look like when body-parser or the router throws them (http-errors). */
@@ -29,7 +30,7 @@ export class ProblemFilter implements ExceptionFilter {
     const reference = typeof request.id === 'string' ? request.id : 'none';
     if (failed) {
       // pino writes the request's id and the stack beside it.
-      this.log.error({ err: error, reference }, 'request failed');
+      this.log.error({ err: loggable(error), reference }, 'request failed');
     }
     if (response.headersSent) {
       // A stream broke on the way: only closing the connection tells the reader.

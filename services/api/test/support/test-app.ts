@@ -3,6 +3,7 @@ import { EntityManager } from '@mikro-orm/postgresql';
 import { createTestDatabase, type TestDatabase } from '@noonwell/testkit/postgres';
 import supertest, { type Agent } from 'supertest';
 import { readSettings, type Settings } from '../../src/config/settings';
+import type { LogTarget } from '../../src/http/logging';
 import { createApp } from '../../src/create-app';
 
 // Starting the whole API on a busy machine takes longer than jest's 5 s; nothing here measures time.
@@ -18,15 +19,18 @@ export interface TestApp {
 }
 
 /** The whole API on a database of its own. Limits are out of the way unless a test sets them. */
-export async function startTestApp(change: Partial<Settings> = {}): Promise<TestApp> {
+export async function startTestApp(change: Partial<Settings> = {}, logTo?: LogTarget): Promise<TestApp> {
   const database = await createTestDatabase();
   const settings = readSettings({ DATABASE_URL: database.appUrl, LOG_LEVEL: 'silent', NODE_ENV: 'test' });
   const many = 1_000_000;
-  const app = await createApp({
-    ...settings,
-    limits: { signInsPerAddress: many, signInsPerAccount: many, costlyPerPerson: many },
-    ...change,
-  }).catch(async (error: unknown) => {
+  const app = await createApp(
+    {
+      ...settings,
+      limits: { signInsPerAddress: many, signInsPerAccount: many, costlyPerPerson: many },
+      ...change,
+    },
+    logTo,
+  ).catch(async (error: unknown) => {
     await database.drop();
     throw error;
   });
