@@ -1,8 +1,6 @@
 import { WEATHER_CHANNELS, type WeatherYear } from '@noonwell/engine';
 import { tableFromArrays, tableToIPC } from 'apache-arrow';
 
-export const ARROW_STREAM = 'application/vnd.apache.arrow.stream';
-
 /** Start times and measured channels of a weather year as an Arrow IPC stream. */
 export function weatherColumnsStream(year: WeatherYear): Uint8Array {
   const channels = Object.fromEntries(WEATHER_CHANNELS.map((channel) => [channel, year[channel]]));

@@ -21,6 +21,7 @@ import {
   ApiProduces,
   ApiTags,
 } from '@nestjs/swagger';
+import { ARROW_STREAM_TYPE } from '@noonwell/persistence';
 import { nameSchema, pageOf, weatherYearSchema, type WeatherYearView } from '@noonwell/schema';
 import { createZodDto, ZodResponse } from 'nestjs-zod';
 import { z } from 'zod';
@@ -29,7 +30,6 @@ import { attachment } from '../http/attachment';
 import { LimitCostly } from '../http/limits';
 import { IdParamsDto, PageQueryDto, type Page } from '../http/paging';
 import { ProblemException } from '../http/problem';
-import { ARROW_STREAM } from './weather-arrow';
 import { WeatherFileInterceptor } from './weather-file.interceptor';
 import { fileLabel } from './weather-names';
 import { WeatherService } from './weather.service';
@@ -101,14 +101,14 @@ export class WeatherController {
   }
 
   @Get(':id/columns')
-  @ApiProduces(ARROW_STREAM)
+  @ApiProduces(ARROW_STREAM_TYPE)
   @ApiOkResponse({ description: 'Arrow IPC stream: startLocalMs and the measured channels', ...BINARY })
   async columns(
     @CurrentPrincipal() principal: Principal,
     @Param() { id }: IdParamsDto,
   ): Promise<StreamableFile> {
     const bytes = await this.weather.columns(principal, id);
-    return new StreamableFile(bytes, { type: ARROW_STREAM, length: bytes.length });
+    return new StreamableFile(bytes, { type: ARROW_STREAM_TYPE, length: bytes.length });
   }
 
   @Delete(':id')
