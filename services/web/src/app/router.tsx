@@ -1,5 +1,7 @@
 import type { ComponentType } from 'react';
-import { createBrowserRouter, redirect, type RouteObject } from 'react-router-dom';
+import { createBrowserRouter, matchRoutes, redirect, type RouteObject } from 'react-router-dom';
+import { signInAddress } from '../shared/api/return-address.js';
+import { ensureSessionKnown } from '../shared/api/session.js';
 import { HydrateFallback, Root } from './root.js';
 import { RouteError } from './route-error.js';
 import { loadSession, requireSignedIn, requireSignedOut } from './session-loaders.js';
@@ -8,6 +10,9 @@ import { loadSession, requireSignedIn, requireSignedOut } from './session-loader
 function page(load: () => Promise<{ default: ComponentType }>): Pick<RouteObject, 'lazy' | 'ErrorBoundary'> {
   return { ErrorBoundary: RouteError, lazy: async () => ({ Component: (await load()).default }) };
 }
+
+/** A mark of routes that lead nobody but signed-in people anywhere. */
+const members = { handle: { members: true } } as const;
 
 export const routes: RouteObject[] = [
   {
@@ -18,13 +23,14 @@ export const routes: RouteObject[] = [
     // Who is signed in is known after the first load; later changes come through the session store.
     shouldRevalidate: () => false,
     children: [
-      { index: true, Component: HydrateFallback, loader: () => redirect('/studies') },
+      { ...members, index: true, Component: HydrateFallback, loader: () => redirect('/studies') },
       {
         path: 'sign-in',
         loader: requireSignedOut,
         ...page(() => import('../features/sign-in/sign-in-page.js')),
       },
       {
+        ...members,
         loader: requireSignedIn,
         ...page(() => import('./frame.js')),
         children: [
@@ -50,6 +56,17 @@ export const routes: RouteObject[] = [
   },
 ];
 
-export function createAppRouter() {
+/**
+ * The router, opened at the sign-in page where nobody is signed in: a redirect inside the router comes only
+ * after it has begun to load the page that is not going to be shown.
+ */
+export async function createAppRouter() {
+  // Where the server does not answer, the router's own loader says so.
+  const session = await ensureSessionKnown().catch(() => null);
+  const { location } = window;
+  const isForMembers = matchRoutes(routes, location)?.some(({ route }) => route.handle === members.handle);
+  if (session?.status === 'signedOut' && isForMembers === true) {
+    window.history.replaceState(null, '', signInAddress(location));
+  }
   return createBrowserRouter(routes);
 }

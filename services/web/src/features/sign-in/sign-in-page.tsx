@@ -1,4 +1,4 @@
-import { Card, makeStyles, tokens } from '@fluentui/react-components';
+import { makeStyles, tokens } from '@fluentui/react-components';
 import { useCallback } from 'react';
 import { useNavigate, useSearchParams } from 'react-router-dom';
 import { returnAddress } from '../../shared/api/return-address.js';
@@ -33,7 +33,12 @@ const useStyles = makeStyles({
     gap: '32px',
     '@media (max-width: 767px)': { gridTemplateColumns: 'minmax(0, 1fr)', gap: '24px' },
   },
-  card: { padding: '20px' },
+  card: {
+    padding: '20px',
+    backgroundColor: tokens.colorNeutralBackground1,
+    border: `1px solid ${tokens.colorNeutralStroke2}`,
+    borderRadius: tokens.borderRadiusLarge,
+  },
   caution: {
     marginTop: '32px',
     maxWidth: '75ch',
@@ -59,9 +64,9 @@ export default function SignInPage() {
         </div>
         <PageHeader title="Sign in" below="Heat and power from one dish, hour by hour." />
         <div className={styles.columns}>
-          <Card className={styles.card}>
+          <div className={styles.card}>
             <SignInForm onSignedIn={goOn} />
-          </Card>
+          </div>
           <DemoAccounts onSignedIn={goOn} />
         </div>
         <p className={styles.caution}>

@@ -102,6 +102,7 @@ function PointAtYear({ study, years }: { study: StudyView; years: readonly Weath
   const present = study.scenarios[0]?.weatherYearId ?? null;
   const [chosenId, setChosenId] = useState<string | null>(null);
   const chosen = years.find(({ id }) => id === (chosenId ?? present));
+  const waiting = study.scenarios.some(({ latestRun }) => latestRun === null);
   const same = study.scenarios.every(({ weatherYearId }) => weatherYearId === chosen?.id);
   return (
     <>
@@ -139,7 +140,7 @@ function PointAtYear({ study, years }: { study: StudyView; years: readonly Weath
           <ErrorState what="The study still points where it did." error={point.error} />
         </div>
       )}
-      {point.isSuccess && same && (
+      {point.isSuccess && same && waiting && (
         <MessageBar intent="success" className={styles.message}>
           <MessageBarBody>
             All scenarios point at it now, each in a new version. Press run for results on it.

@@ -7,7 +7,7 @@ import {
 import { queryOptions } from '@tanstack/react-query';
 import type { z } from 'zod';
 import { request, requestRaw } from './client.js';
-import { endSession, startSession } from './session.js';
+import { endSession, startSession, tellOtherTabsOfSignOut } from './session.js';
 
 export const demoAccountsQuery = queryOptions({
   queryKey: ['demo-accounts'],
@@ -29,5 +29,6 @@ export async function signOut(): Promise<void> {
     await requestRaw('POST /api/auth/sign-out');
   } finally {
     endSession();
+    tellOtherTabsOfSignOut();
   }
 }

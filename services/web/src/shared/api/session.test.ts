@@ -82,3 +82,11 @@ it('refuses an answer that breaks the contract and names the route', async () =>
     (error) => error instanceof ContractError && error.route === 'GET /api/studies',
   );
 });
+
+it('follows a sign-out in another tab of the browser', () => {
+  startSession(access());
+  window.dispatchEvent(new StorageEvent('storage', { key: 'noonwell.theme' }));
+  expect(getSession().status).toBe('signedIn');
+  window.dispatchEvent(new StorageEvent('storage', { key: 'noonwell.signed-out', newValue: '1' }));
+  expect(getSession().status).toBe('signedOut');
+});

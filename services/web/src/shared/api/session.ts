@@ -12,6 +12,7 @@ export type Session =
   | { readonly status: 'signedIn'; readonly me: Me };
 
 const REFRESH_ROUTE = 'POST /api/auth/refresh';
+const SIGNED_OUT_KEY = 'noonwell.signed-out';
 /** Ask for a new token this long before the old one ends, so that no request travels with a dying one. */
 const RENEW_BEFORE_MS = 20_000;
 
@@ -45,6 +46,19 @@ export function endSession(): void {
   token = null;
   change({ status: 'signedOut' });
 }
+
+/** Tells the other tabs of this browser that the person has signed out: storage events reach all but this one. */
+export function tellOtherTabsOfSignOut(): void {
+  try {
+    localStorage.setItem(SIGNED_OUT_KEY, String(Date.now()));
+  } catch {
+    // Storage is switched off: the other tabs notice at their next renewal.
+  }
+}
+
+window.addEventListener('storage', ({ key }) => {
+  if (key === SIGNED_OUT_KEY && session.status === 'signedIn') endSession();
+});
 
 /** For tests: as if the page had just been opened. */
 export function forgetSession(): void {
