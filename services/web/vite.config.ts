@@ -1,3 +1,4 @@
+import { fileURLToPath } from 'node:url';
 import react from '@vitejs/plugin-react';
 import { defaultClientConditions, defineConfig } from 'vite';
 
@@ -6,7 +7,15 @@ const api = process.env['NOONWELL_API_URL'] ?? 'http://127.0.0.1:4300';
 export default defineConfig({
   plugins: [react()],
   // Our own packages are read from their sources, so nothing has to be built first.
-  resolve: { conditions: ['@noonwell/source', ...defaultClientConditions] },
+  resolve: {
+    conditions: ['@noonwell/source', ...defaultClientConditions],
+    alias: [
+      {
+        find: /^zod$/,
+        replacement: fileURLToPath(new URL('./src/shared/zod-without-eval.ts', import.meta.url)),
+      },
+    ],
+  },
   worker: { format: 'es' },
   build: {
     target: 'es2022',
