@@ -195,12 +195,12 @@ describe('studies and scenarios', () => {
       .put(`/api/studies/${study.id}/weather-year`)
       .send({ weatherYearId: desert })
       .expect(200);
-    const { scenarios, weatherNames } = studySchema.parse(pointed.body);
+    const { scenarios, weatherYears } = studySchema.parse(pointed.body);
     expect(scenarios.map(({ version, weatherYearId }) => [version, weatherYearId])).toEqual([
       [2, desert],
       [1, desert],
     ]);
-    expect(weatherNames).toEqual(['Desert']);
+    expect(weatherYears.map(({ name }) => name)).toEqual(['Desert']);
     const inUse = await engineer.delete(`/api/weather-years/${desert}`).expect(409);
     expect(problemSchema.parse(inUse.body).type).toBe('urn:noonwell:problem:weather-in-use');
   });

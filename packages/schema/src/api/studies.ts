@@ -22,8 +22,8 @@ export const studySummarySchema = z.object({
   sandbox: z.boolean(),
   ownerName: z.string(),
   scenarioCount: z.int(),
-  /** Weather years that the scenarios point at. */
-  weatherNames: z.array(z.string()),
+  /** Weather years that the scenarios point at, by name; a synthetic one is marked wherever it is named. */
+  weatherYears: z.array(z.object({ id: idSchema, name: z.string(), synthetic: z.boolean() })),
   activeRuns: z.int(),
   lastRunFinishedAt: instantSchema.nullable(),
   updatedAt: instantSchema,

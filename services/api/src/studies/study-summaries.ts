@@ -7,7 +7,7 @@ import { mayWriteStudy } from './study-access';
 interface Counts {
   id: string;
   scenario_count: number;
-  weather_names: string[];
+  weather_years: StudySummary['weatherYears'];
   active_runs: number;
   last_run_finished_at: Date | string | null;
 }
@@ -25,10 +25,12 @@ export async function studySummaries(
   const rows = await em.execute<Counts[]>(
     `select s.id,
        (select count(*)::int from scenarios c where c.study_id = s.id) as scenario_count,
-       array(select distinct w.name from scenarios c
-         join scenario_versions v on v.scenario_id = c.id and v.version = c.newest_version
-         join weather_years w on w.id = v.weather_year_id
-         where c.study_id = s.id order by 1) as weather_names,
+       (select coalesce(jsonb_agg(jsonb_build_object('id', w.id, 'name', w.name, 'synthetic', w.synthetic)
+           order by w.name, w.id), '[]')
+         from weather_years w where w.id in (
+           select v.weather_year_id from scenarios c
+             join scenario_versions v on v.scenario_id = c.id and v.version = c.newest_version
+             where c.study_id = s.id)) as weather_years,
        (select count(*)::int from runs r
          where r.study_id = s.id and r.state in (${marks(ACTIVE_RUN_STATES)})) as active_runs,
        (select max(r.finished_at) from runs r where r.study_id = s.id and r.state = 'done') as last_run_finished_at
@@ -46,7 +48,7 @@ export async function studySummaries(
       sandbox: study.sandbox,
       ownerName: study.owner.getEntity().name,
       scenarioCount: counts?.scenario_count ?? 0,
-      weatherNames: counts?.weather_names ?? [],
+      weatherYears: counts?.weather_years ?? [],
       activeRuns: counts?.active_runs ?? 0,
       lastRunFinishedAt: last === null ? null : new Date(last).toISOString(),
       updatedAt: study.updatedAt.toISOString(),

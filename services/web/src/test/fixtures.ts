@@ -92,7 +92,7 @@ export function study(over: Partial<StudyView> = {}): StudyView {
     sandbox: false,
     ownerName: 'Ines Hollander',
     scenarioCount: 1,
-    weatherNames: ['Brackenfold'],
+    weatherYears: [{ id: id(30), name: 'Brackenfold', synthetic: true }],
     activeRuns: 0,
     lastRunFinishedAt: null,
     updatedAt: NOW,

@@ -47,7 +47,7 @@ function Comparison({ study }: { study: StudyView }) {
   const styles = useStyles();
   const [view, change] = useView();
   const shown = useMemo(() => shownScenarios(study.scenarios, view), [study.scenarios, view]);
-  const { compared, without, loading, error, retry } = useCompared(shown.scenarios);
+  const { compared, without, loading, error, retry } = useCompared(shown.scenarios, study.weatherYears);
   const baseline = compared.find(({ scenarioId }) => scenarioId === shown.baseline?.id) ?? compared[0];
   const others = compared.filter((one) => one !== baseline);
   const drawn = compared.filter(({ scenarioId }) => !view.hidden.includes(scenarioId));

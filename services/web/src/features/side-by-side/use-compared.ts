@@ -1,5 +1,6 @@
-import type { ScenarioView } from '@noonwell/schema';
+import type { ScenarioView, StudyView } from '@noonwell/schema';
 import { useQueries } from '@tanstack/react-query';
+import { markedWeatherName } from '../../shared/format/weather-name.js';
 import { runSummaryQuery } from './api.js';
 import type { Compared } from './model/compared.js';
 
@@ -14,7 +15,10 @@ export interface ComparedScenarios {
 }
 
 /** Scenarios with their results. The study brings the summaries along; one that it left out is fetched. */
-export function useCompared(scenarios: readonly ScenarioView[]): ComparedScenarios {
+export function useCompared(
+  scenarios: readonly ScenarioView[],
+  weatherYears: StudyView['weatherYears'],
+): ComparedScenarios {
   const done = scenarios.flatMap((scenario) =>
     scenario.latestRun?.state === 'done' ? [{ scenario, run: scenario.latestRun }] : [],
   );
@@ -28,6 +32,7 @@ export function useCompared(scenarios: readonly ScenarioView[]): ComparedScenari
     compared: done.flatMap(({ scenario, run }, index): Compared[] => {
       const summary = results[index]?.data;
       if (!summary) return [];
+      const year = weatherYears.find(({ id }) => id === run.weatherYearId);
       return [
         {
           scenarioId: scenario.id,
@@ -36,7 +41,7 @@ export function useCompared(scenarios: readonly ScenarioView[]): ComparedScenari
           position: scenario.position,
           version: scenario.version,
           weatherYearId: run.weatherYearId,
-          weatherYearName: scenario.weatherYearName ?? '',
+          weatherYearName: year === undefined ? (scenario.weatherYearName ?? '') : markedWeatherName(year),
           document: scenario.document,
           summary,
         },

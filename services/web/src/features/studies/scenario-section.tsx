@@ -33,6 +33,7 @@ import { RouterLink } from '../../shared/components/router-link.js';
 import { RunStateBadge } from '../../shared/components/run-state-badge.js';
 import { ScenarioSwatch } from '../../shared/components/scenario-swatch.js';
 import { Section } from '../../shared/components/section.js';
+import { WeatherNames } from '../../shared/components/weather-names.js';
 import { energyUnitFor } from '../../shared/format/energy.js';
 import { formatSignificant } from '../../shared/format/number.js';
 import { NewScenarioDialog } from './new-scenario-dialog.js';
@@ -171,7 +172,14 @@ function useColumns(
       kind: 'text',
       cell: ({ document }) => receivers[document.catch.receiver.kind] ?? document.catch.receiver.kind,
     },
-    { key: 'weather', heading: 'Weather year', kind: 'text', cell: (row) => row.weatherYearName ?? 'None' },
+    {
+      key: 'weather',
+      heading: 'Weather year',
+      kind: 'text',
+      cell: ({ weatherYearId }) => (
+        <WeatherNames years={study.weatherYears.filter(({ id }) => id === weatherYearId)} none="None" />
+      ),
+    },
     { key: 'version', heading: 'Version', kind: 'number', cell: ({ version }) => version },
     {
       key: 'run',

@@ -48,7 +48,7 @@ it('lists question, weather, last result and what is running', async () => {
   const row = await screen.findByRole('listitem');
   expect(row).toHaveTextContent('Is a dual cell receiver worth its price?');
   expect(row).toHaveTextContent('2 runs under way');
-  expect(row).toHaveTextContent('Brackenfold');
+  expect(row).toHaveTextContent('Brackenfold Synthetic');
   expect(row).toHaveTextContent(/1 Mar 2026/);
 });
 
@@ -69,6 +69,7 @@ it('says what failed, and loads again at a press', async () => {
 it('points all scenarios of a study at a weather year', async () => {
   const api = withStudy();
   const moved = study({
+    weatherYears: [{ id: id(31), name: 'Desert', synthetic: false }],
     scenarios: [scenario({ version: 2, weatherYearId: id(31), weatherYearName: 'Desert' })],
   });
   api.on('PUT /api/studies/{id}/weather-year', () => {
@@ -77,7 +78,7 @@ it('points all scenarios of a study at a weather year', async () => {
   });
   const { user } = renderApp(ADDRESS);
   // The present year is synthetic and says so.
-  expect(await screen.findByText('Synthetic')).toBeInTheDocument();
+  expect(await screen.findByText(/All scenarios run on/)).toHaveTextContent('Brackenfold Synthetic');
   const choice = screen.getByRole('combobox', { name: 'Weather year of all scenarios' });
   await user.click(choice);
   expect(await screen.findByRole('option', { name: /Brackenfold \(synthetic\)/ })).toBeInTheDocument();
@@ -95,7 +96,7 @@ it('lets a student read a shared study, change nothing, and says why', async () 
   withStudy(study({ mayWrite: false }), 'student');
   renderApp(ADDRESS);
   expect(await screen.findByText(/your role does not change studies/)).toBeInTheDocument();
-  await screen.findByText('All scenarios run on');
+  await screen.findByText(/All scenarios run on/);
   for (const name of ['Rename', 'Delete', 'Add a scenario', 'Point the study at it']) {
     expect(screen.queryByRole('button', { name })).not.toBeInTheDocument();
   }

@@ -1,6 +1,7 @@
 import { Badge, makeStyles, tokens } from '@fluentui/react-components';
 import type { StudySummary } from '@noonwell/schema';
 import { RouterLink } from '../../shared/components/router-link.js';
+import { WeatherNames } from '../../shared/components/weather-names.js';
 import { formatInstant } from '../../shared/format/date.js';
 import { formatPlural } from '../../shared/format/number.js';
 
@@ -55,7 +56,7 @@ export function StudyRow({ study }: { study: StudySummary }) {
         <div>
           <dt className={styles.label}>Weather</dt>
           <dd className={styles.value}>
-            {study.weatherNames.length === 0 ? 'None chosen' : study.weatherNames.join(', ')}
+            <WeatherNames years={study.weatherYears} none="None chosen" />
           </dd>
         </div>
         <div>

@@ -17,9 +17,10 @@ import { MOST_LISTED, weatherYearsQuery } from '../../shared/api/weather-years.j
 import { EmptyState } from '../../shared/components/empty-state.js';
 import { ErrorState } from '../../shared/components/error-state.js';
 import { LoadingState } from '../../shared/components/loading-state.js';
-import { LinkButton, RouterLink } from '../../shared/components/router-link.js';
-import { SyntheticBadge } from '../../shared/components/synthetic-badge.js';
+import { LinkButton } from '../../shared/components/router-link.js';
+import { WeatherNames } from '../../shared/components/weather-names.js';
 import { formatCount, formatQuantity } from '../../shared/format/number.js';
+import { markedWeatherName } from '../../shared/format/weather-name.js';
 
 const useStyles = makeStyles({
   present: { margin: '0 0 12px', display: 'flex', flexWrap: 'wrap', gap: '4px 8px', alignItems: 'center' },
@@ -47,7 +48,7 @@ export function WeatherChoice({ study }: { study: StudyView }) {
   const { items, total } = years.data;
   return (
     <>
-      <PresentYears study={study} years={items} />
+      <PresentYears study={study} />
       {total === 0 ? (
         <EmptyState
           title="No weather year yet"
@@ -71,27 +72,21 @@ export function WeatherChoice({ study }: { study: StudyView }) {
   );
 }
 
-function PresentYears({ study, years }: { study: StudyView; years: readonly WeatherYearView[] }) {
+function PresentYears({ study }: { study: StudyView }) {
   const styles = useStyles();
-  const pointed = new Map(
-    study.scenarios.flatMap(({ weatherYearId, weatherYearName }) =>
-      weatherYearId === null ? [] : [[weatherYearId, weatherYearName ?? 'Unnamed'] as const],
-    ),
-  );
+  const years = study.weatherYears;
   const without = study.scenarios.filter(({ weatherYearId }) => weatherYearId === null).length;
+  if (years.length === 0) {
+    return <div className={styles.present}>No scenario points at a weather year yet; a run needs one.</div>;
+  }
   return (
     <div className={styles.present}>
-      {pointed.size === 0 && 'No scenario points at a weather year yet; a run needs one.'}
-      {pointed.size === 1 && without === 0 && 'All scenarios run on'}
-      {(pointed.size > 1 || (pointed.size === 1 && without > 0)) && 'Scenarios run on'}
-      {[...pointed].map(([id, name]) => (
-        <span key={id}>
-          <RouterLink to={`/weather/${id}`}>{name}</RouterLink>{' '}
-          {years.find((year) => year.id === id)?.synthetic === true && <SyntheticBadge />}
-        </span>
-      ))}
-      {pointed.size > 0 && without > 0 && `, and ${formatCount(without)} on none yet`}
-      {pointed.size > 1 && '(compare scenarios on one weather year only)'}
+      <span>
+        {years.length === 1 && without === 0 ? 'All scenarios run on ' : 'Scenarios run on '}
+        <WeatherNames years={years} none="" linked />
+        {without > 0 && `, and ${formatCount(without)} on none yet`}
+        {years.length > 1 && ' (compare scenarios on one weather year only)'}
+      </span>
     </div>
   );
 }
@@ -152,7 +147,5 @@ function PointAtYear({ study, years }: { study: StudyView; years: readonly Weath
 }
 
 function yearText(year: WeatherYearView): string {
-  // The names of the demo's years say it already.
-  const mark = year.synthetic && !/synthetic/i.test(year.name) ? ' (synthetic)' : '';
-  return `${year.name}${mark}, DNI ${formatQuantity(year.summary.dniKwhM2, 'kWh/m²')}`;
+  return `${markedWeatherName(year)}, DNI ${formatQuantity(year.summary.dniKwhM2, 'kWh/m²')}`;
 }

@@ -38,7 +38,7 @@ function study(latestRun: Run | null): StudyView {
     sandbox: false,
     ownerName: 'Somebody',
     scenarioCount: 1,
-    weatherNames: [],
+    weatherYears: [],
     activeRuns: 0,
     lastRunFinishedAt: null,
     updatedAt: AT,
