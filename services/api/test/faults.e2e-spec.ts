@@ -52,9 +52,11 @@ describe('the log', () => {
     await test.close();
 
     const log = lines.join('');
-    const said = (message: string, part: object) => { expect(lines.map((line) => JSON.parse(line) as unknown)).toContainEqual(
+    const said = (message: string, part: object) => {
+      expect(lines.map((line) => JSON.parse(line) as unknown)).toContainEqual(
         expect.objectContaining({ msg: message, ...part }),
-      ); };
+      );
+    };
     said('sign-in refused', { userId });
     said('signed in', { userId });
     said('refused', { userId, role: 'student', route: 'GET /api/workspace/members' });
