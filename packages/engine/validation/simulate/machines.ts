@@ -65,5 +65,5 @@ export const COIL_MACHINE: Machine = {
 export const CELL_MACHINE: Machine = {
   ...COIL_MACHINE,
   receiver: cellSettings(),
-  loop: { ...COIL_MACHINE.loop, setPointC: 84, outletLimitC: 85.5 },
+  loop: { ...COIL_MACHINE.loop, setPointC: 84, outletLimitC: 85 },
 };

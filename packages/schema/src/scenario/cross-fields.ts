@@ -1,40 +1,19 @@
+import { loadDefinition } from './loads/index.js';
+import type { CrossFieldProblem } from './problem.js';
+import { receiverDefinition } from './receivers/index.js';
 import type { Scenario } from './scenario.js';
-
-interface CrossFieldProblem {
-  readonly path: (string | number)[];
-  readonly message: string;
-}
+import { sumOf } from './schedule.js';
 
 /** What no single field can see: each rule names the field to change. */
 export function crossFieldProblems(scenario: Scenario): CrossFieldProblem[] {
   const problems: CrossFieldProblem[] = [];
   const rule = (holds: boolean, path: string, message: string) => {
-    if (!holds)
-      problems.push({ path: path.split('.').map((key) => (/^\d+$/.test(key) ? Number(key) : key)), message });
+    if (!holds) problems.push({ path, message });
   };
   const { dish, tracker, receiver } = scenario.catch;
   const { pump, tank } = scenario.carryAndKeep;
 
-  const fitsBehindDish = (sideM: number) => sideM * Math.SQRT2 < dish.apertureDiameterM;
-  rule(
-    fitsBehindDish(receiver.faceSideM),
-    'catch.receiver.faceSideM',
-    'The receiver is larger than the dish: its diagonal must be less than the aperture diameter',
-  );
-  if (receiver.kind === 'cell' && receiver.secondary.kind === 'mixingDuct') {
-    rule(
-      fitsBehindDish(receiver.secondary.entrySideM),
-      'catch.receiver.secondary.entrySideM',
-      "The duct's entry is larger than the dish: its diagonal must be less than the aperture diameter",
-    );
-  }
-  if (receiver.kind === 'cell') {
-    rule(
-      receiver.inverterStandingLossFraction <= 1 / receiver.inverterEfficiency - 1,
-      'catch.receiver.inverterStandingLossFraction',
-      'The standing loss alone is more than the whole loss at the rating: lower it or the efficiency',
-    );
-  }
+  problems.push(...receiverDefinition(receiver.kind).problems(receiver, dish.apertureDiameterM));
   rule(
     tracker.elevationMinDeg < tracker.elevationMaxDeg,
     'catch.tracker.elevationMaxDeg',
@@ -72,31 +51,12 @@ export function crossFieldProblems(scenario: Scenario): CrossFieldProblem[] {
     'The pump would exchange the whole tank within two minutes: lower the greatest flow or enlarge the tank',
   );
   scenario.use.loads.forEach((load, index) => {
-    rule(
-      peakLitresPerMinute(load) <= tankLitres,
-      `use.loads.${index}.litresPerDay`,
-      'The busiest hour would draw the whole tank within a minute: lower the draw or enlarge the tank',
-    );
-    rule(
-      sum(load.hourlyWeights) > 0,
-      `use.loads.${index}.hourlyWeights`,
-      'At least one hour needs a weight above 0',
-    );
+    problems.push(...loadDefinition(load.kind).problems(load, `use.loads.${index}`, tankLitres));
   });
   rule(
-    sum(scenario.use.electricity.hourlyWeights) > 0,
+    sumOf(scenario.use.electricity.hourlyWeights) > 0,
     'use.electricity.hourlyWeights',
     'At least one hour needs a weight above 0',
   );
   return problems;
-}
-
-function sum(values: readonly number[]): number {
-  return values.reduce((total, value) => total + value, 0);
-}
-
-function peakLitresPerMinute(load: Scenario['use']['loads'][number]): number {
-  const peakShare = Math.max(...load.hourlyWeights) / Math.max(sum(load.hourlyWeights), Number.MIN_VALUE);
-  const busiestDay = Math.max(...load.monthFactors) * Math.max(1, load.weekendFactor);
-  return (load.litresPerDay * busiestDay * peakShare) / 60;
 }

@@ -1,20 +1,13 @@
 import { z } from 'zod';
 import { fieldRegistry } from '../field.js';
 import { variantName } from './fields.js';
-import type { ReceiverKind } from './receivers/index.js';
+import { receiverDefinition, type ReceiverKind } from './receivers/index.js';
 import { scenarioSchema, scenarioShape, type Scenario } from './scenario.js';
 
-/**
- * The default machine of the given receiver, complete. Loop settings that suit one receiver only are set
- * here and nowhere else.
- */
+/** The default machine of the given receiver, complete, with the pump settings that suit it. */
 export function newScenario(receiver: ReceiverKind = 'coil'): Scenario {
   const scenario = scenarioShape.parse(defaultsOf(scenarioShape, new Map([['receiver', receiver]]), ''));
-  if (receiver === 'cell') {
-    // Cells want cooler water than a coil: the coolant leaves at 84 °C and never above 85 °C.
-    scenario.carryAndKeep.pump.setPointC = 84;
-    scenario.carryAndKeep.pump.outletLimitC = 85.5;
-  }
+  Object.assign(scenario.carryAndKeep.pump, receiverDefinition(receiver).pumpDefaults);
   return scenarioSchema.parse(scenario);
 }
 

@@ -30,7 +30,12 @@ export const scenarioShape = z.strictObject({
 
 export const scenarioSchema = scenarioShape.superRefine((scenario, context) => {
   for (const problem of crossFieldProblems(scenario)) {
-    context.addIssue({ code: 'custom', path: problem.path, message: problem.message, input: scenario });
+    context.addIssue({
+      code: 'custom',
+      path: problem.path.split('.').map((key) => (/^\d+$/.test(key) ? Number(key) : key)),
+      message: problem.message,
+      input: scenario,
+    });
   }
 });
 export type Scenario = z.infer<typeof scenarioShape>;

@@ -1,3 +1,4 @@
+import type { Schedule } from '@noonwell/engine';
 import { INVENTED, numberField, numberListField } from '../field.js';
 
 /** Weights of the 24 hours, a factor for weekends and one for each month: shared by every scheduled use. */
@@ -33,4 +34,16 @@ export function scheduleFields(what: string, hourly: readonly number[], weekend:
       source: INVENTED,
     }),
   };
+}
+
+export function toSchedule(fields: Schedule): Schedule {
+  return {
+    hourlyWeights: fields.hourlyWeights,
+    weekendFactor: fields.weekendFactor,
+    monthFactors: fields.monthFactors,
+  };
+}
+
+export function sumOf(values: readonly number[]): number {
+  return values.reduce((total, value) => total + value, 0);
 }

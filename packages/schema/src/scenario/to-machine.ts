@@ -1,9 +1,10 @@
-import type { LoadSettings, Machine, ReceiverSettings, Schedule } from '@noonwell/engine';
-import type { ReceiverDocument } from './receivers/index.js';
+import { JOULES_PER_KWH, type Machine } from '@noonwell/engine';
+import { loadDefinition } from './loads/index.js';
+import { receiverDefinition } from './receivers/index.js';
 import type { Scenario } from './scenario.js';
+import { toSchedule } from './schedule.js';
 
 const DEG = Math.PI / 180;
-const JOULES_PER_KWH = 3.6e6;
 
 /** From the scenario's units to the engine's: SI, radians, °C. The only place where they are converted. */
 export function toMachine(scenario: Scenario): Machine {
@@ -34,7 +35,7 @@ export function toMachine(scenario: Scenario): Machine {
       resumeAfterS: tracker.resumeAfterMinutes * 60,
     },
     trackerPower: { standbyW: tracker.standbyPowerW, movingW: tracker.movingPowerW },
-    receiver: toReceiver(receiver),
+    receiver: receiverDefinition(receiver.kind).toSettings(receiver),
     loop: {
       setPointC: pump.setPointC,
       outletLimitC: pump.outletLimitC,
@@ -67,73 +68,11 @@ export function toMachine(scenario: Scenario): Machine {
       topLimitC: tank.topLimitC,
       topHysteresisK: tank.topHysteresisK,
     },
-    load: toLoad(load),
+    load: loadDefinition(load.kind).toSettings(load),
     electricityUse: {
       annualUseJ: scenario.use.electricity.annualUseKwh * JOULES_PER_KWH,
       schedule: toSchedule(scenario.use.electricity),
     },
     stepS: scenario.simulation.stepMinutes * 60,
   };
-}
-
-function toSchedule(fields: Schedule): Schedule {
-  return {
-    hourlyWeights: fields.hourlyWeights,
-    weekendFactor: fields.weekendFactor,
-    monthFactors: fields.monthFactors,
-  };
-}
-
-function toLoad(load: Scenario['use']['loads'][number]): LoadSettings {
-  return {
-    kind: load.kind,
-    volumePerDayM3: load.litresPerDay / 1000,
-    setPointC: load.setPointC,
-    schedule: toSchedule(load),
-    boilerCapacityW: load.boilerCapacityKw * 1000,
-    boilerEfficiency: load.boilerEfficiency,
-  };
-}
-
-function toReceiver(receiver: ReceiverDocument): ReceiverSettings {
-  const face = {
-    sideM: receiver.faceSideM,
-    absorptance: receiver.absorptance,
-    emittance: receiver.emittance,
-    backLossWK: receiver.backLossWK,
-    heatCapacityJK: receiver.heatCapacityJK,
-    windHeightFactor: receiver.windHeightFactor,
-  };
-  switch (receiver.kind) {
-    case 'coil':
-      return { kind: 'coil', face, coilUaWK: receiver.coilUaWK };
-    case 'cell':
-      return {
-        kind: 'cell',
-        face,
-        secondary: receiver.secondary,
-        cell: {
-          referenceEfficiency: receiver.referenceEfficiency,
-          referenceConcentration: receiver.referenceConcentration,
-          referenceTemperatureC: receiver.referenceTemperatureC,
-          seriesConcentration: receiver.seriesConcentration,
-          temperatureCoefficientPerK: receiver.temperatureCoefficientPerK,
-          openCircuitVoltageV: receiver.openCircuitVoltageV,
-          idealityFactor: receiver.idealityFactor,
-          operatingVoltageV: receiver.operatingVoltageV,
-          bypassVoltageV: receiver.bypassVoltageV,
-          areaResistanceM2KW: receiver.cellAreaResistanceM2KW,
-          temperatureLimitC: receiver.cellTemperatureLimitC,
-        },
-        grouping: receiver.grouping,
-        cellsPerSide: receiver.cellsPerSide,
-        packingFraction: receiver.packingFraction,
-        plateUaWK: receiver.plateUaWK,
-        inverter: {
-          ratingW: receiver.inverterRatingW,
-          efficiency: receiver.inverterEfficiency,
-          standingLossFraction: receiver.inverterStandingLossFraction,
-        },
-      };
-  }
 }

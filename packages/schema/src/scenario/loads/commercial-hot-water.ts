@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { COMMON_PRACTICE, INVENTED, numberField } from '../../field.js';
-import { scheduleFields } from '../schedule.js';
+import { scheduleFields, sumOf, toSchedule } from '../schedule.js';
+import type { LoadDefinition } from './definition.js';
 
 /** Cleaning water from six in the morning to two in the afternoon. */
 const WORKING_MORNING = [0, 0, 0, 0, 0, 0, 1, 1, 1, 1, 1, 1, 1, 1, 0, 0, 0, 0, 0, 0, 0, 0, 0, 0];
@@ -45,3 +46,28 @@ export const commercialHotWaterSchema = z.strictObject({
     source: COMMON_PRACTICE,
   }),
 });
+
+type Document = z.infer<typeof commercialHotWaterSchema>;
+
+export const commercialHotWater: LoadDefinition<Document> = {
+  toSettings: (document) => ({
+    kind: 'commercialHotWater',
+    volumePerDayM3: document.litresPerDay / 1000,
+    setPointC: document.setPointC,
+    schedule: toSchedule(document),
+    boilerCapacityW: document.boilerCapacityKw * 1000,
+    boilerEfficiency: document.boilerEfficiency,
+  }),
+  problems: (document, path, tankLitres) => {
+    const total = sumOf(document.hourlyWeights);
+    if (!(total > 0))
+      return [{ path: `${path}.hourlyWeights`, message: 'At least one hour needs a weight above 0' }];
+    const busiestDay = Math.max(...document.monthFactors) * Math.max(1, document.weekendFactor);
+    const peakLitresPerMinute =
+      (document.litresPerDay * busiestDay * Math.max(...document.hourlyWeights)) / total / 60;
+    if (peakLitresPerMinute <= tankLitres) return [];
+    const message =
+      'The busiest hour would draw the whole tank within a minute: lower the draw or enlarge the tank';
+    return [{ path: `${path}.litresPerDay`, message }];
+  },
+};

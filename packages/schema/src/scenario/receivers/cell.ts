@@ -1,6 +1,8 @@
 import { z } from 'zod';
 import { INVENTED, fieldRegistry, integerField, numberField } from '../../field.js';
-import { faceFields } from './face.js';
+import { fitsBeforeDish } from '../problem.js';
+import type { ReceiverDefinition } from './definition.js';
+import { faceFields, faceProblems, toFace } from './face.js';
 
 const CELL_MODEL = 'form of the relation: model documentation, receivers; value invented';
 
@@ -213,3 +215,56 @@ export const cellReceiverSchema = z.strictObject({
     source: INVENTED,
   }),
 });
+
+type CellDocument = z.infer<typeof cellReceiverSchema>;
+
+export const cellReceiver: ReceiverDefinition<CellDocument> = {
+  toSettings: (document) => ({
+    kind: 'cell',
+    face: toFace(document),
+    secondary: document.secondary,
+    cell: {
+      referenceEfficiency: document.referenceEfficiency,
+      referenceConcentration: document.referenceConcentration,
+      referenceTemperatureC: document.referenceTemperatureC,
+      seriesConcentration: document.seriesConcentration,
+      temperatureCoefficientPerK: document.temperatureCoefficientPerK,
+      openCircuitVoltageV: document.openCircuitVoltageV,
+      idealityFactor: document.idealityFactor,
+      operatingVoltageV: document.operatingVoltageV,
+      bypassVoltageV: document.bypassVoltageV,
+      areaResistanceM2KW: document.cellAreaResistanceM2KW,
+      temperatureLimitC: document.cellTemperatureLimitC,
+    },
+    grouping: document.grouping,
+    cellsPerSide: document.cellsPerSide,
+    packingFraction: document.packingFraction,
+    plateUaWK: document.plateUaWK,
+    inverter: {
+      ratingW: document.inverterRatingW,
+      efficiency: document.inverterEfficiency,
+      standingLossFraction: document.inverterStandingLossFraction,
+    },
+  }),
+  problems: (document, apertureDiameterM) => [
+    ...faceProblems(document, apertureDiameterM),
+    ...ductProblems(document, apertureDiameterM),
+    ...inverterProblems(document),
+  ],
+  // Cells want cooler water than a coil: it leaves at 84 °C, and the coolant never passes 85 °C.
+  pumpDefaults: { setPointC: 84, outletLimitC: 85 },
+};
+
+function ductProblems({ secondary }: CellDocument, apertureDiameterM: number) {
+  if (secondary.kind !== 'mixingDuct' || fitsBeforeDish(secondary.entrySideM, apertureDiameterM)) return [];
+  const message =
+    "The duct's entry is larger than the dish: its diagonal must be less than the aperture diameter";
+  return [{ path: 'catch.receiver.secondary.entrySideM', message }];
+}
+
+function inverterProblems(document: CellDocument) {
+  if (document.inverterStandingLossFraction <= 1 / document.inverterEfficiency - 1) return [];
+  const message =
+    'The standing loss alone is more than the whole loss at the rating: lower it or the efficiency';
+  return [{ path: 'catch.receiver.inverterStandingLossFraction', message }];
+}

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { INVENTED, numberField } from '../../field.js';
-import { faceFields } from './face.js';
+import type { ReceiverDefinition } from './definition.js';
+import { faceFields, faceProblems, toFace } from './face.js';
 
 export const coilReceiverSchema = z.strictObject({
   kind: z.literal('coil'),
@@ -15,3 +16,9 @@ export const coilReceiverSchema = z.strictObject({
     source: INVENTED,
   }),
 });
+
+export const coilReceiver: ReceiverDefinition<z.infer<typeof coilReceiverSchema>> = {
+  toSettings: (document) => ({ kind: 'coil', face: toFace(document), coilUaWK: document.coilUaWK }),
+  problems: faceProblems,
+  pumpDefaults: {},
+};

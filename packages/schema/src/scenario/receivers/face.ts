@@ -1,4 +1,6 @@
+import type { FaceSettings } from '@noonwell/engine';
 import { INVENTED, numberField } from '../../field.js';
+import { fitsBeforeDish, type CrossFieldProblem } from '../problem.js';
 
 /** Fields that every receiver with a flat square face has. */
 export const faceFields = {
@@ -57,3 +59,30 @@ export const faceFields = {
     source: 'one-seventh power law, common practice, no source',
   }),
 };
+
+interface FaceDocument {
+  readonly faceSideM: number;
+  readonly absorptance: number;
+  readonly emittance: number;
+  readonly backLossWK: number;
+  readonly heatCapacityJK: number;
+  readonly windHeightFactor: number;
+}
+
+export function toFace(document: FaceDocument): FaceSettings {
+  return {
+    sideM: document.faceSideM,
+    absorptance: document.absorptance,
+    emittance: document.emittance,
+    backLossWK: document.backLossWK,
+    heatCapacityJK: document.heatCapacityJK,
+    windHeightFactor: document.windHeightFactor,
+  };
+}
+
+export function faceProblems(document: FaceDocument, apertureDiameterM: number): CrossFieldProblem[] {
+  if (fitsBeforeDish(document.faceSideM, apertureDiameterM)) return [];
+  const message =
+    'The receiver is larger than the dish: its diagonal must be less than the aperture diameter';
+  return [{ path: 'catch.receiver.faceSideM', message }];
+}

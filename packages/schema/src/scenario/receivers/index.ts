@@ -1,9 +1,10 @@
 import { z } from 'zod';
 import { fieldRegistry } from '../../field.js';
-import { cellReceiverSchema } from './cell.js';
-import { coilReceiverSchema } from './coil.js';
+import { cellReceiver, cellReceiverSchema } from './cell.js';
+import { coilReceiver, coilReceiverSchema } from './coil.js';
+import type { ReceiverDefinition } from './definition.js';
 
-/** A new receiver is a new file and one line here (and its model in the engine's registry). */
+/** A new receiver is a new file and its lines here (and its model in the engine's registry). */
 export const receiverSchema = z
   .discriminatedUnion('kind', [coilReceiverSchema, cellReceiverSchema])
   .register(fieldRegistry, {
@@ -17,3 +18,17 @@ export const receiverSchema = z
 export type ReceiverDocument = z.infer<typeof receiverSchema>;
 export type ReceiverKind = ReceiverDocument['kind'];
 export const RECEIVER_KINDS = ['coil', 'cell'] as const satisfies readonly ReceiverKind[];
+
+type DocumentOf<Kind extends ReceiverKind> = Extract<ReceiverDocument, { kind: Kind }>;
+
+const DEFINITIONS: { readonly [Kind in ReceiverKind]: ReceiverDefinition<DocumentOf<Kind>> } = {
+  coil: coilReceiver,
+  cell: cellReceiver,
+};
+
+/** What a kind of receiver brings besides its fields. */
+export function receiverDefinition<Kind extends ReceiverKind>(
+  kind: Kind,
+): ReceiverDefinition<DocumentOf<Kind>> {
+  return DEFINITIONS[kind];
+}
