@@ -38,6 +38,16 @@ describe('the built web and the headers of every answer', () => {
     await test.client().get('/index.html').expect(200).expect('Cache-Control', 'no-cache');
   });
 
+  it('compresses scripts for who takes it, and leaves the API alone', async () => {
+    writeFileSync(join(folder, 'assets', 'long-abc123.js'), `export default '${'sun '.repeat(2000)}';`);
+    const script = () => test.client().get('/assets/long-abc123.js');
+    await script().set('Accept-Encoding', 'gzip').expect('Content-Encoding', 'gzip');
+    const plain = await script().set('Accept-Encoding', 'identity').expect(200);
+    expect(plain.headers['content-encoding']).toBeUndefined();
+    const api = await test.client().get('/api/openapi.json').set('Accept-Encoding', 'gzip').expect(200);
+    expect(api.headers['content-encoding']).toBeUndefined();
+  });
+
   it('has no page where a file is missing or below /api, and nothing from outside its folder', async () => {
     for (const path of ['/assets/index-old.js', '/missing.png', '/api/nothing', '/..%2fsecret.txt']) {
       const answer = await test.client().get(path);

@@ -1,3 +1,4 @@
+import compression from 'compression';
 import { Router, static as files } from 'express';
 import { existsSync } from 'node:fs';
 import { join } from 'node:path';
@@ -14,6 +15,12 @@ export function staticWeb(folder: string): Router {
   if (!existsSync(index))
     throw new SettingsError(`NOONWELL_WEB_DIST: ${folder} holds no index.html. Build the web first.`);
   const router = Router();
+  const compress = compression();
+  router.use((request, response, next) => {
+    // Not the API: an event stream must not wait in a compressor, and columns hardly shrink.
+    if (isApi(request.path)) next();
+    else compress(request, response, next);
+  });
   router.use(
     '/assets',
     files(join(folder, 'assets'), { immutable: true, maxAge: YEAR_S * 1000, fallthrough: true }),
@@ -27,7 +34,7 @@ export function staticWeb(folder: string): Router {
   router.get('/{*page}', (request, response, next) => {
     // A missing file is a 404, not a page: a script that got HTML would fail in a puzzling way.
     const isFile = request.path.startsWith('/assets/') || /\.\w+$/.test(request.path);
-    if (isFile || request.path === '/api' || request.path.startsWith('/api/')) {
+    if (isFile || isApi(request.path)) {
       next();
       return;
     }
@@ -35,4 +42,8 @@ export function staticWeb(folder: string): Router {
     response.sendFile(index);
   });
   return router;
+}
+
+function isApi(path: string): boolean {
+  return path === '/api' || path.startsWith('/api/');
 }
