@@ -150,7 +150,6 @@ create table runs (
   requested_by_id uuid not null references users (id),
   created_at timestamptz(3) not null,
   started_at timestamptz(3),
-  heartbeat_at timestamptz(3),
   finished_at timestamptz(3),
   engine_ms double precision,
   unique (workspace_id, id),

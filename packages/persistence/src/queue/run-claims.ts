@@ -35,7 +35,6 @@ export async function claimRun(em: EntityManager, claim: RunClaim): Promise<Clai
       state: 'running',
       claimToken: claim.token,
       startedAt: raw('coalesce(started_at, now())'),
-      heartbeatAt: new Date(),
     },
   );
   if (changed === 0) {
@@ -56,7 +55,6 @@ export async function reportProgress(
 ): Promise<'go on' | 'cancel' | 'claim lost'> {
   const changed = await em.nativeUpdate(RunRow, held(claim), {
     progress: raw('greatest(progress, ?)', [progress]),
-    heartbeatAt: new Date(),
   });
   if (changed === 0) return 'claim lost';
   const run = await em.findOneOrFail(RunRow, { id: claim.runId }, { fields: ['cancelRequested'] });
@@ -121,7 +119,7 @@ export async function requeueRun(em: EntityManager, claim: RunClaim, job: RunYea
   const changed = await em.nativeUpdate(
     RunRow,
     { ...held(claim), cancelRequested: false },
-    { state: 'queued', claimToken: null, heartbeatAt: null },
+    { state: 'queued', claimToken: null },
   );
   if (changed === 1) await putInOutbox(em, job);
   return changed === 1;

@@ -97,7 +97,6 @@ export async function retryRun(em: EntityManager, job: RunYearJob): Promise<bool
       cancelRequested: false,
       claimToken: null,
       startedAt: null,
-      heartbeatAt: null,
       finishedAt: null,
       engineMs: null,
     },

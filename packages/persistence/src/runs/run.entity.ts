@@ -35,7 +35,6 @@ export const RunRow = defineEntity({
     createdAt: createdAtProperty(),
     startedAt: p.datetime(3).nullable(),
     /** Last sign of life of the worker, for the reconciler. */
-    heartbeatAt: p.datetime(3).nullable(),
     finishedAt: p.datetime(3).nullable(),
     engineMs: p.double().$type<number>().nullable(),
   },

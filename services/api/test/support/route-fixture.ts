@@ -75,7 +75,6 @@ export async function addBelongings(
         claimToken: null,
         requestedBy: by,
         startedAt: new Date(),
-        heartbeatAt: null,
         finishedAt: new Date(),
         engineMs: null,
       });
