@@ -6,10 +6,12 @@ import process from 'node:process';
 import { ensureBuilt } from './lib/build.mjs';
 import { migrateAndSeed, openDatabase } from './lib/database.mjs';
 import { appEnvironment } from './lib/environment.mjs';
+import { dataHold, giveHold, takeHold } from './lib/hold.mjs';
 import { readStartOptions, requireNode } from './lib/options.mjs';
 import { ensurePackages } from './lib/packages.mjs';
 import { endAll, readRunning, removeRunFile, writeRunFile } from './lib/run-file.mjs';
 import { endedError, requireFreePort, serve, stopPart } from './lib/serve.mjs';
+import { DATABASE_MIB, requireSpace } from './lib/space.mjs';
 import { StartError, fail, step } from './lib/step.mjs';
 
 /** @type {import('./lib/serve.mjs').Part[]} */
@@ -20,7 +22,6 @@ let stopping = false;
 
 async function stopEverything() {
   stopping = true;
-  if (parts.length === 0 && undo.length === 0) return;
   await step('Stopping', async () => {
     // Side by side: neither needs the other to end cleanly, and the database outlives both.
     await Promise.all(parts.map(stopPart));
@@ -40,12 +41,17 @@ async function main() {
   requireNode();
   const { port, data } = readStartOptions(process.argv.slice(2));
   const address = `http://127.0.0.1:${String(port)}`;
+  requireSpace(data, DATABASE_MIB, 'The database');
+  const holder = takeHold(dataHold(data));
   const before = readRunning(data);
-  if (before?.starter !== undefined) {
-    throw new StartError(
-      `Noonwell already runs at ${before.address} (process ${String(before.starter)}). Stop it with: npm run stop`,
-    );
+  if (holder !== undefined) {
+    const where = before === undefined ? `is being started on ${data}` : `already runs at ${before.address}`;
+    throw new StartError(`Noonwell ${where} (process ${String(holder)}). Stop it with: npm run stop`);
   }
+  undo.push(() => {
+    giveHold(dataHold(data));
+    return Promise.resolve();
+  });
   if (before !== undefined && before.parts.length > 0) {
     await step('Ending what an interrupted start left behind', () => endAll(before.parts));
   }

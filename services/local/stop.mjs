@@ -1,6 +1,7 @@
 /** `npm run stop`: ends an app that was started from another terminal, with its database. */
 import process from 'node:process';
 import { stopOwnPostgres } from './lib/cluster.mjs';
+import { dataHold, holderOf } from './lib/hold.mjs';
 import { readStartOptions } from './lib/options.mjs';
 import { endAll, readRunning, removeRunFile } from './lib/run-file.mjs';
 import { fail, step } from './lib/step.mjs';
@@ -10,7 +11,8 @@ try {
   await step('Stopping', async (note) => {
     const running = readRunning(data);
     // The starter stops its own parts in order; only when it is gone they are ended from here.
-    const pids = running?.starter === undefined ? (running?.parts ?? []) : [running.starter];
+    const starter = holderOf(dataHold(data));
+    const pids = starter === undefined ? (running?.parts ?? []) : [starter];
     await endAll(pids);
     const database = await stopOwnPostgres(data);
     removeRunFile(data);

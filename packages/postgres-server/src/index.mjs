@@ -12,6 +12,7 @@ import {
   mkdirSync,
   readFileSync,
   readdirSync,
+  renameSync,
   rmSync,
   writeFileSync,
 } from 'node:fs';
@@ -113,18 +114,21 @@ export function hasCluster(dir) {
  */
 export async function initCluster(dir, superuserPassword) {
   const user = unprivilegedUser();
-  mkdirSync(dir, { recursive: true, mode: 0o700 });
-  chmodSync(dir, 0o700);
+  // Made beside its place and moved there when whole: a start killed meanwhile leaves nothing that looks like a database.
+  const making = `${dir}.new`;
+  rmSync(making, { recursive: true, force: true });
+  mkdirSync(making, { recursive: true, mode: 0o700 });
+  chmodSync(making, 0o700);
   // initdb wants its folder empty, so the password file stands beside it.
   const passwordFile = `${dir}.pw`;
   writeFileSync(passwordFile, `${superuserPassword}\n`, { mode: 0o600 });
   if (user !== undefined) {
-    chownSync(dir, user.uid, user.gid);
+    chownSync(making, user.uid, user.gid);
     chownSync(passwordFile, user.uid, user.gid);
   }
   try {
     await run('initdb', [
-      `--pgdata=${dir}`,
+      `--pgdata=${making}`,
       `--username=${SUPERUSER}`,
       `--pwfile=${passwordFile}`,
       '--auth=scram-sha-256',
@@ -135,6 +139,25 @@ export async function initCluster(dir, superuserPassword) {
   } finally {
     rmSync(passwordFile, { force: true });
   }
+  renameSync(making, dir);
+}
+
+/**
+ * Major version that made the cluster, as "15".
+ * @param {string} dir data folder of a cluster
+ * @returns {string}
+ */
+export function clusterMajor(dir) {
+  return readFileSync(join(dir, 'PG_VERSION'), 'utf8').trim();
+}
+
+/**
+ * Major version of the installed programs, as "15".
+ * @returns {string}
+ */
+export function installedMajor() {
+  const { stdout } = spawnSync(binary('postgres'), ['--version'], { cwd: '/', encoding: 'utf8' });
+  return /(\d+)/.exec(stdout)?.[1] ?? '';
 }
 
 /**

@@ -2,6 +2,7 @@ import { existsSync, mkdirSync, readdirSync, statSync, utimesSync, writeFileSync
 import { dirname, join } from 'node:path';
 import process from 'node:process';
 import { capture } from './exec.mjs';
+import { alone } from './hold.mjs';
 import { entry, installed, root, workspaceFiles } from './paths.mjs';
 import { step } from './step.mjs';
 
@@ -44,6 +45,13 @@ function outdated() {
  * @returns {Promise<void>}
  */
 export async function ensureBuilt({ force = false } = {}) {
+  if (!force && !outdated()) return;
+  await alone(() => build(force));
+}
+
+/** @param {boolean} force */
+async function build(force) {
+  // Whoever was waited for may have done it.
   if (!force && !outdated()) return;
   // Taken before building: a source saved meanwhile must count as newer.
   const started = new Date();

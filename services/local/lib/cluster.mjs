@@ -1,10 +1,12 @@
 import { createHash } from 'node:crypto';
-import { existsSync, mkdirSync } from 'node:fs';
+import { existsSync, mkdirSync, readdirSync } from 'node:fs';
 import { join } from 'node:path';
 import {
+  clusterMajor,
   freePort,
   hasCluster,
   initCluster,
+  installedMajor,
   reachable,
   runningPort,
   startCluster,
@@ -38,12 +40,14 @@ export async function startOwnPostgres(data, secrets, secretsFresh) {
   return step('Starting PostgreSQL', async (note) => {
     const stop = () => stopCluster(dir);
     if (!hasCluster(dir)) {
+      requireNothingThere(dir);
       await initCluster(dir, secrets.superuserPassword);
     } else if (secretsFresh) {
       throw new StartError(
         `There is a database in ${dir}, but its passwords in ${join(data, 'secrets.json')} are gone. Put that file back, or move the database folder away to start empty.`,
       );
     }
+    requireSameMajor(dir);
     const where = (/** @type {number} */ port) => `127.0.0.1:${String(port)}, data in ${dir}`;
     const running = runningPort(dir);
     if (running !== undefined) {
@@ -67,4 +71,28 @@ export async function stopOwnPostgres(data) {
   if (runningPort(dir) === undefined) return false;
   await stopCluster(dir);
   return true;
+}
+
+/**
+ * @param {string} dir
+ * @throws {StartError} when the database's folder holds something that is no database
+ */
+export function requireNothingThere(dir) {
+  if (!existsSync(dir) || readdirSync(dir).length === 0) return;
+  throw new StartError(
+    `${dir} holds files, but no PostgreSQL database (PG_VERSION is missing). Move it away, put a backup back, or start empty: npm run reset`,
+  );
+}
+
+/**
+ * @param {string} dir
+ * @throws {StartError} when another major version of PostgreSQL made the database
+ */
+export function requireSameMajor(dir) {
+  const made = clusterMajor(dir);
+  const installed = installedMajor();
+  if (made === installed) return;
+  throw new StartError(
+    `The database in ${dir} was made by PostgreSQL ${made}, and version ${installed} is installed. Install postgresql-${made} again, or take the data over with pg_dumpall (see "Backups" in the README).`,
+  );
 }

@@ -3,6 +3,8 @@ import { join } from 'node:path';
 import process from 'node:process';
 import { capture } from './exec.mjs';
 import { root } from './paths.mjs';
+import { alone } from './hold.mjs';
+import { INSTALL_MIB, requireSpace } from './space.mjs';
 import { step } from './step.mjs';
 
 /** @typedef {Record<string, { version?: string, link?: boolean, optional?: boolean, devOptional?: boolean }>} LockedPackages */
@@ -40,8 +42,14 @@ function firstMissing() {
  * @returns {Promise<void>}
  */
 export async function ensurePackages() {
-  const missing = firstMissing();
-  if (missing === undefined) return;
+  if (firstMissing() === undefined) return;
+  await alone(install);
+}
+
+async function install() {
+  // Whoever was waited for may have done it.
+  if (firstMissing() === undefined) return;
+  requireSpace(root, INSTALL_MIB, 'Installing the npm packages');
   await step('Installing npm packages (about a minute and a half the first time)', async () => {
     const npm = process.env['npm_execpath'];
     const [command, args] = npm === undefined ? ['npm', []] : [process.execPath, [npm]];

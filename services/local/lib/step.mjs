@@ -45,7 +45,25 @@ export async function step(title, work) {
  * @returns {never}
  */
 export function fail(error) {
-  if (error instanceof StartError) process.stderr.write(`\n${error.message}\n`);
+  const sentence = fileFault(error);
+  if (sentence !== undefined) process.stderr.write(`\n${sentence}\n`);
+  else if (error instanceof StartError) process.stderr.write(`\n${error.message}\n`);
   else process.stderr.write(`\n${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`);
   process.exit(1);
+}
+
+/**
+ * What the file system said, for the faults that a person can mend.
+ * @param {unknown} error
+ * @returns {string | undefined}
+ */
+export function fileFault(error) {
+  if (!(error instanceof Error) || !('code' in error)) return undefined;
+  const path = 'path' in error && typeof error.path === 'string' ? error.path : 'a file';
+  if (error.code === 'ENOSPC')
+    return `The disk is full: ${path} could not be written. Make room, then start again.`;
+  if (error.code === 'EACCES' || error.code === 'EPERM' || error.code === 'EROFS') {
+    return `${path} cannot be written by this account. Correct its owner or rights, or choose another data folder: npm start -- --data DIR`;
+  }
+  return undefined;
 }
