@@ -22,6 +22,7 @@ let stopping = false;
 
 async function stopEverything() {
   stopping = true;
+  if (parts.length === 0 && undo.length === 0) return;
   await step('Stopping', async () => {
     // Side by side: neither needs the other to end cleanly, and the database outlives both.
     await Promise.all(parts.map(stopPart));

@@ -76,5 +76,11 @@ async function build(force) {
  */
 export async function compile() {
   const projects = workspaceFiles('tsconfig.build.json');
-  await capture(process.execPath, [installed('typescript/bin/tsc'), '-b', ...projects], { what: 'tsc -b' });
+  // tsc trusts its notes and would not make a dist folder again that somebody deleted.
+  const forced = projects.every((project) => existsSync(join(root, dirname(project), 'dist')))
+    ? []
+    : ['--force'];
+  await capture(process.execPath, [installed('typescript/bin/tsc'), '-b', ...forced, ...projects], {
+    what: 'tsc -b',
+  });
 }
