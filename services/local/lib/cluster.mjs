@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto';
-import { existsSync, mkdirSync, readdirSync } from 'node:fs';
+import { existsSync, mkdirSync, readFileSync, readdirSync } from 'node:fs';
+import { connect } from 'node:net';
 import { join } from 'node:path';
 import {
   clusterMajor,
@@ -49,7 +50,7 @@ export async function startOwnPostgres(data, secrets, secretsFresh) {
     }
     requireSameMajor(dir);
     const where = (/** @type {number} */ port) => `127.0.0.1:${String(port)}, data in ${dir}`;
-    const running = runningPort(dir);
+    const running = await answeringPort(dir);
     if (running !== undefined) {
       note(`already running, ${where(running)}`);
       return { port: running, stop };
@@ -95,4 +96,44 @@ export function requireSameMajor(dir) {
   throw new StartError(
     `The database in ${dir} was made by PostgreSQL ${made}, and version ${installed} is installed. Install postgresql-${made} again, or take the data over with pg_dumpall (see "Backups" in the README).`,
   );
+}
+
+const ANSWERS_WITHIN_MS = 15_000;
+
+/**
+ * Port of our PostgreSQL if it runs and answers. One that is just going down, or was killed and not yet buried, is
+ * waited for.
+ * @param {string} dir
+ * @param {number} [withinMs]
+ * @returns {Promise<number | undefined>} undefined when it does not run
+ */
+export async function answeringPort(dir, withinMs = ANSWERS_WITHIN_MS) {
+  const until = Date.now() + withinMs;
+  for (;;) {
+    const port = runningPort(dir);
+    if (port === undefined || (await answers(port))) return port;
+    if (Date.now() > until) {
+      const pid = readFileSync(join(dir, 'postmaster.pid'), 'utf8').split('\n')[0] ?? '';
+      throw new StartError(
+        `A PostgreSQL server (process ${pid}) holds ${dir}, but does not answer on port ${String(port)}. End it with: kill ${pid} — then start again.`,
+      );
+    }
+    await new Promise((resolve) => setTimeout(resolve, 200));
+  }
+}
+
+/**
+ * @param {number} port
+ * @returns {Promise<boolean>} whether anybody takes connections there
+ */
+function answers(port) {
+  return new Promise((resolve) => {
+    const socket = connect({ host: '127.0.0.1', port });
+    const end = (/** @type {boolean} */ yes) => () => {
+      socket.destroy();
+      resolve(yes);
+    };
+    socket.once('connect', end(true));
+    socket.once('error', end(false));
+  });
 }
