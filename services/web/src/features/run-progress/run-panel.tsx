@@ -1,9 +1,10 @@
 import { Button, makeStyles, MessageBar, MessageBarBody, tokens } from '@fluentui/react-components';
 import { PlayRegular } from '@fluentui/react-icons';
-import type { StudyView } from '@noonwell/schema';
+import type { ScenarioView, StudyView } from '@noonwell/schema';
 import { useMay } from '../../shared/api/me.js';
 import { ErrorState } from '../../shared/components/error-state.js';
 import { Section } from '../../shared/components/section.js';
+import { markedWeatherName } from '../../shared/format/weather-name.js';
 import { useStartRuns } from './api.js';
 import { isActive, STATE_WORDS, shownState, whyNotRunnable } from './model/run-words.js';
 import { RunRow } from './run-row.js';
@@ -74,6 +75,7 @@ export function RunPanel({ study }: { study: StudyView }) {
             <RunRow
               key={scenario.id}
               scenario={scenario}
+              weatherName={weatherNameOf(study, scenario)}
               pace={scenario.latestRun ? paces[scenario.latestRun.id] : undefined}
               mayRun={mayRun}
               starting={start.isPending}
@@ -97,4 +99,9 @@ export function RunPanel({ study }: { study: StudyView }) {
       </div>
     </Section>
   );
+}
+
+function weatherNameOf({ weatherYears }: StudyView, { weatherYearId }: ScenarioView): string | null {
+  const year = weatherYears.find(({ id }) => id === weatherYearId);
+  return year ? markedWeatherName(year) : null;
 }

@@ -1,6 +1,6 @@
 import { Button, makeStyles, mergeClasses, ProgressBar, tokens } from '@fluentui/react-components';
 import { ArrowClockwiseRegular, DismissRegular, PlayRegular } from '@fluentui/react-icons';
-import type { ScenarioView } from '@noonwell/schema';
+import type { Run, ScenarioView } from '@noonwell/schema';
 import { ErrorState } from '../../shared/components/error-state.js';
 import { RunStateBadge } from '../../shared/components/run-state-badge.js';
 import { formatDurationMs, formatInstant } from '../../shared/format/date.js';
@@ -32,6 +32,8 @@ const useStyles = makeStyles({
 
 interface RunRowProps {
   scenario: ScenarioView;
+  /** Of the scenario's weather year, marked where it is synthetic; null without one. */
+  weatherName: string | null;
   pace: Pace | undefined;
   mayRun: boolean;
   onRun: () => void;
@@ -39,7 +41,7 @@ interface RunRowProps {
 }
 
 /** One scenario's newest version: its run, how far it is, and what can be done about it. */
-export function RunRow({ scenario, pace, mayRun, onRun, starting }: RunRowProps) {
+export function RunRow({ scenario, weatherName, pace, mayRun, onRun, starting }: RunRowProps) {
   const styles = useStyles();
   const run = scenario.latestRun;
   const timeLeft = run?.state === 'running' ? timeLeftWords(secondsLeft(pace)) : null;
@@ -55,7 +57,7 @@ export function RunRow({ scenario, pace, mayRun, onRun, starting }: RunRowProps)
       </span>
       <div className={mergeClasses(styles.state, styles.wide)}>
         <RunStateBadge state={run?.state ?? null} {...(run ? { progress: run.progress } : {})} />
-        <span className={styles.note}>{note(scenario, timeLeft, stopping)}</span>
+        <span className={styles.note}>{note(run, weatherName, timeLeft, stopping)}</span>
         {isActive(run) && (
           <ProgressBar
             className={styles.bar}
@@ -114,8 +116,8 @@ export function RunRow({ scenario, pace, mayRun, onRun, starting }: RunRowProps)
   );
 }
 
-function note({ latestRun: run, weatherYearName }: ScenarioView, timeLeft: string | null, stopping: boolean) {
-  if (!run) return weatherYearName === null ? 'No weather year chosen' : `On ${weatherYearName}`;
+function note(run: Run | null, weatherName: string | null, timeLeft: string | null, stopping: boolean) {
+  if (!run) return weatherName === null ? 'No weather year chosen' : `On ${weatherName}`;
   if (stopping) return 'Stopping …';
   switch (run.state) {
     case 'queued':
