@@ -81,7 +81,9 @@ describe('saving', () => {
     const side = field('Side of the square face');
     expect(told(side)).toMatch(/The receiver is larger than the dish/);
     fireEvent.click(within(summary).getByText('Side of the square face'));
-    expect(side).toHaveFocus();
+    await waitFor(() => {
+      expect(side).toHaveFocus();
+    });
     expect(api.callsOf('PUT /api/scenarios/{id}')).toEqual([]);
   });
 
