@@ -38,11 +38,8 @@ describe('the scenario form', () => {
     expect(plain(await summary.textContent())).toContain('The receiver is larger than the dish');
     await expectAccessible(page, 'the form with an error');
     await summary.getByRole('button', { name: 'Side of the square face' }).click();
-    expect(
-      await page
-        .getByRole('textbox', { name: 'Side of the square face', exact: true })
-        .evaluate((field) => field === document.activeElement),
-    ).toBe(true);
+    const side = page.getByRole('textbox', { name: 'Side of the square face', exact: true });
+    await expect.poll(() => side.evaluate((field) => field === document.activeElement)).toBe(true);
   });
 
   it('names a value that is no number, with its unit', async () => {
