@@ -111,20 +111,12 @@ describe.each(files)('the first path with %s', (_, file) => {
 
   it('shows a ledger that adds up, with its residual as a number', async () => {
     const { page } = here;
-    const rows = page.getByRole('region', { name: 'Residuals of all parts by size' }).getByRole('row');
-    const texts = await rows.allTextContents();
-    const shares = texts.slice(1).map((text) =>
-      Number(
-        plain(text)
-          .replaceAll('−', '-')
-          .match(/\de-\d+$/)?.[0],
-      ),
-    );
-    expect(shares).toHaveLength(2);
     const cells = await page
       .getByRole('region', { name: 'Residuals of all parts by size' })
       .locator('tbody tr td:last-child')
       .allTextContents();
+    // One a scenario; a cell without a number is NaN and fails.
+    expect(cells).toHaveLength(2);
     for (const cell of cells) expect(Number(plain(cell).replaceAll('−', '-'))).toBeLessThanOrEqual(1e-9);
 
     const dish = page.getByRole('region', { name: 'Ledger of the dish over the year' });
@@ -132,6 +124,7 @@ describe.each(files)('the first path with %s', (_, file) => {
     const numbers = values.map((value) => Number(plain(value).replaceAll(',', '').replaceAll('−', '-')));
     const sum = numbers.reduce((total, value) => total + value, 0);
     // Each line is shown to a tenth of a kWh.
+    expect(numbers.length).toBeGreaterThan(5);
     expect(Math.abs(sum)).toBeLessThanOrEqual(0.05 * numbers.length);
     expect(numbers[0]).toBeGreaterThan(0);
   });

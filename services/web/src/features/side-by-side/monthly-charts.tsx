@@ -111,6 +111,8 @@ function bars(
 function monthLayout(title: string): Partial<Layout> {
   return {
     barmode: 'group',
+    // Also with one scenario drawn: whose bars they are is not said elsewhere.
+    showlegend: true,
     bargap: 0.25,
     xaxis: { type: 'category' },
     yaxis: { title: { text: title }, rangemode: 'tozero' },

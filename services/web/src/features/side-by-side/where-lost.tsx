@@ -60,7 +60,7 @@ export function WhereLost({ scenarios }: { scenarios: readonly Compared[] }) {
             },
             {
               key: 'share',
-              heading: 'Over the beam on the aperture',
+              heading: 'Over the beam',
               kind: 'number',
               cell: (index) => formatResidual(table.residualOfBeam[index]),
             },
