@@ -1,4 +1,5 @@
 export * from './columns/index.js';
+export { isForeignKeyViolation, loggable, plainMessage } from './database-errors.js';
 export { ENTITIES } from './entities.js';
 export { Membership } from './identity/membership.entity.js';
 export { RefreshToken } from './identity/refresh-token.entity.js';

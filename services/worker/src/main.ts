@@ -1,6 +1,7 @@
 import 'reflect-metadata';
 import type { NestApplicationOptions } from '@nestjs/common';
 import { NestFactory } from '@nestjs/core';
+import { plainMessage } from '@noonwell/persistence';
 import { Logger } from 'nestjs-pino';
 import { workerSettings } from './settings';
 import { WorkerModule } from './worker.module';
@@ -19,6 +20,6 @@ async function main(): Promise<void> {
 }
 
 main().catch((error: unknown) => {
-  process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);
+  process.stderr.write(`${plainMessage(error)}\n`);
   process.exit(1);
 });

@@ -1,6 +1,6 @@
 import 'reflect-metadata';
 import { createYearRun } from '@noonwell/engine';
-import { createOrm } from '@noonwell/persistence';
+import { createOrm, plainMessage } from '@noonwell/persistence';
 import { seedDemoWorkspace } from './demo/seed-demo-workspace';
 import { workerSettings } from './settings';
 
@@ -21,8 +21,6 @@ async function main(): Promise<void> {
 }
 
 main().catch((error: unknown) => {
-  process.stderr.write(
-    `The demo could not be made: ${error instanceof Error ? error.message : String(error)}\n`,
-  );
+  process.stderr.write(`The demo could not be made: ${plainMessage(error)}\n`);
   process.exitCode = 1;
 });

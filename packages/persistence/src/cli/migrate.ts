@@ -1,5 +1,6 @@
 /** `node dist/cli/migrate.js`: DATABASE_OWNER_URL owns the tables; DATABASE_APP_ROLE, or else the user of DATABASE_URL, is the app's role. */
 import process from 'node:process';
+import { plainMessage } from '../database-errors.js';
 import { migrateDatabase } from '../migrate.js';
 
 function required(name: string): string {
@@ -14,6 +15,6 @@ try {
   await migrateDatabase(required('DATABASE_OWNER_URL'), appRole);
   process.stdout.write('The database has the present schema.\n');
 } catch (error) {
-  process.stderr.write(`Migration failed: ${error instanceof Error ? error.message : String(error)}\n`);
+  process.stderr.write(`Migration failed: ${plainMessage(error)}\n`);
   process.exitCode = 1;
 }

@@ -12,6 +12,7 @@ import {
   createOrm,
   Membership,
   normalizeEmail,
+  plainMessage,
   User,
   withScope,
   withSystemTask,
@@ -114,7 +115,7 @@ async function main(): Promise<void> {
 
 if (require.main === module) {
   main().catch((error: unknown) => {
-    process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);
+    process.stderr.write(`${plainMessage(error)}\n`);
     process.exitCode = error instanceof AccountError ? 2 : 1;
   });
 }

@@ -4,6 +4,7 @@ import {
   RUNS_CHANNEL,
   RunRow,
   listen,
+  loggable,
   runSignalSchema,
   withWorkspace,
   type Listener,
@@ -114,7 +115,7 @@ export class RunFeed implements OnApplicationBootstrap, OnModuleDestroy {
       }
     } catch (error) {
       // Whoever watches misses a change until the next one, or until the session is back.
-      this.log.error({ err: error, studyId: study.studyId }, 'changed runs could not be read');
+      this.log.error({ err: loggable(error), studyId: study.studyId }, 'changed runs could not be read');
     } finally {
       study.reading = false;
     }

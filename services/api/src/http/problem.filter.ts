@@ -6,13 +6,13 @@ import {
   type ArgumentsHost,
   type ExceptionFilter,
 } from '@nestjs/common';
+import { isForeignKeyViolation, loggable } from '@noonwell/persistence';
 import type { Problem } from '@noonwell/schema';
 import type { Request, Response } from 'express';
 import { ZodSerializationException, ZodValidationException } from 'nestjs-zod';
 import { STATUS_CODES } from 'node:http';
 import { z } from 'zod';
-import { loggable } from './loggable';
-import { ProblemException, type ProblemErrors } from './problem';
+import { conflict, ProblemException, type ProblemErrors } from './problem';
 
 /** What a request's own errors look like when body-parser or the router throws them (http-errors). */
 const requestErrorSchema = z.object({ status: z.int().min(400).max(499) });
@@ -25,7 +25,10 @@ export class ProblemFilter implements ExceptionFilter {
   catch(error: unknown, host: ArgumentsHost): void {
     const request = host.switchToHttp().getRequest<Request>();
     const response = host.switchToHttp().getResponse<Response>();
-    const problem = { ...problemOf(error), instance: request.path };
+    const problem = {
+      ...problemOf(isForeignKeyViolation(error) ? changedMeanwhile() : error),
+      instance: request.path,
+    };
     const failed = problem.status >= 500;
     const reference = typeof request.id === 'string' ? request.id : 'none';
     if (failed) {
@@ -45,6 +48,14 @@ export class ProblemFilter implements ExceptionFilter {
       .type('application/problem+json')
       .send(JSON.stringify(failed ? { ...problem, reference } : problem));
   }
+}
+
+/** Looked at before it was written, and gone in between. */
+function changedMeanwhile(): ProblemException {
+  return conflict(
+    'changed-meanwhile',
+    'Nothing was saved: somebody else deleted something that this belongs to, at the same moment. Load the page again.',
+  );
 }
 
 function problemOf(error: unknown): Problem {

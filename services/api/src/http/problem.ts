@@ -9,6 +9,7 @@ export type ProblemKind =
   | 'weather-refused'
   | 'weather-in-use'
   | 'version-conflict'
+  | 'changed-meanwhile'
   | 'quota-reached'
   | 'last-administrator'
   | 'too-many-scenarios'

@@ -12,6 +12,7 @@ import {
   OutboxMessage,
   RunRow,
   listen,
+  loggable,
   withSystemTask,
   withWorkspace,
   type Listener,
@@ -37,7 +38,7 @@ export class OutboxRelay implements OnApplicationBootstrap, OnModuleDestroy {
   private readonly repeating = new Repeating(
     () => this.relay(),
     (error) => {
-      this.logger.error({ err: error }, 'Runs cannot reach the queue at the moment');
+      this.logger.error({ err: loggable(error) }, 'Runs cannot reach the queue at the moment');
     },
   );
   private listener: Listener | undefined;
@@ -57,7 +58,10 @@ export class OutboxRelay implements OnApplicationBootstrap, OnModuleDestroy {
         this.repeating.wake();
       },
       onError: (error) => {
-        this.logger.warn({ err: error }, 'Not listening for new runs at the moment; looking once a second');
+        this.logger.warn(
+          { err: loggable(error) },
+          'Not listening for new runs at the moment; looking once a second',
+        );
       },
     });
   }

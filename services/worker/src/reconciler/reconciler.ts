@@ -9,6 +9,7 @@ import {
 import { MikroORM } from '@mikro-orm/postgresql';
 import {
   RunRow,
+  loggable,
   recordCancelled,
   recordFailure,
   requeueRun,
@@ -38,7 +39,7 @@ export class Reconciler implements OnApplicationBootstrap, OnModuleDestroy {
   private readonly repeating = new Repeating(
     () => this.reconcile(),
     (error) => {
-      this.logger.error({ err: error }, 'Runs cannot be compared with the queue at the moment');
+      this.logger.error({ err: loggable(error) }, 'Runs cannot be compared with the queue at the moment');
     },
   );
 

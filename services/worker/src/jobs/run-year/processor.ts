@@ -4,6 +4,7 @@ import { MikroORM } from '@mikro-orm/postgresql';
 import { MODEL_VERSION } from '@noonwell/engine';
 import {
   claimRun,
+  loggable,
   recordCancelled,
   recordFailure,
   requeueRun,
@@ -41,7 +42,7 @@ export class RunYearProcessor extends WorkerHost implements OnApplicationBootstr
 
   onApplicationBootstrap(): void {
     this.worker.run().catch((error: unknown) => {
-      this.logger.error({ err: error }, 'The queue can no longer be read');
+      this.logger.error({ err: loggable(error) }, 'The queue can no longer be read');
     });
   }
 
@@ -55,7 +56,7 @@ export class RunYearProcessor extends WorkerHost implements OnApplicationBootstr
 
   @OnWorkerEvent('error')
   onError(error: Error): void {
-    this.logger.warn({ err: error }, 'Trouble with the queue');
+    this.logger.warn({ err: loggable(error) }, 'Trouble with the queue');
   }
 
   async process(job: Job<unknown>, token?: string): Promise<JobOutcome> {
@@ -71,7 +72,7 @@ export class RunYearProcessor extends WorkerHost implements OnApplicationBootstr
         await this.giveBack(parsed.data, claim, job, token);
       }
       const lastTry = job.attemptsMade + 1 >= (job.opts.attempts ?? 1);
-      this.logger.error({ err: error, runId, lastTry }, 'A run broke off');
+      this.logger.error({ err: loggable(error), runId, lastTry }, 'A run broke off');
       if (lastTry) {
         const sentence = `The run broke off ${String(job.attemptsMade + 1)} times for a reason inside Noonwell, not in the scenario. Try again; if it happens once more, tell whoever runs this server the run's id, ${runId}.`;
         await this.inWorkspace(parsed.data, (em) => recordFailure(em, claim, sentence));
