@@ -14,6 +14,7 @@ import {
 } from '@noonwell/schema';
 import { randomUUID } from 'node:crypto';
 import type { Agent } from 'supertest';
+import { meetUncommitted } from './support/admin-query';
 import { addTenant, signIn, type Tenant } from './support/people';
 import { startTestApp, type TestApp } from './support/test-app';
 import { addWeatherYear } from './support/weather-rows';
@@ -221,6 +222,47 @@ describe('studies and scenarios', () => {
     expect((await engineer.get(`/api/studies/${study.id}`)).body).toMatchObject({
       scenarios: [{ version: 1, weatherYearId: null }],
     });
+  });
+
+  it('lets those who come upon a study just being deleted find nothing, and leaves nothing behind', async () => {
+    const year = await weather();
+    const study = await makeStudy();
+    const scenario = await addScenario(study, { ...coil(), weatherYearId: year });
+    const answers = await meetUncommitted(
+      test.database,
+      'delete from studies where id = $1',
+      [study.id],
+      [
+        () => engineer.post(`/api/studies/${study.id}/scenarios`).send(coil()),
+        () => engineer.put(`/api/scenarios/${scenario.id}`).send(saved(scenario, { weatherYearId: null })),
+        () => engineer.put(`/api/studies/${study.id}/weather-year`).send({ weatherYearId: year }),
+        () => engineer.post(`/api/studies/${study.id}/runs`).send({}),
+        () => engineer.delete(`/api/studies/${study.id}`),
+      ],
+    );
+    expect(answers.map(({ status }) => status)).toEqual([404, 404, 404, 404, 404]);
+  });
+
+  it('saves nothing on a weather year that is just being deleted, and says so', async () => {
+    const year = await weather();
+    const study = await makeStudy();
+    const [answer] = await meetUncommitted(
+      test.database,
+      'delete from weather_years where id = $1',
+      [year],
+      [() => engineer.post(`/api/studies/${study.id}/scenarios`).send({ ...coil(), weatherYearId: year })],
+    );
+    expect(answer?.status).toBe(409);
+    expect(problemSchema.parse(answer?.body).type).toBe('urn:noonwell:problem:changed-meanwhile');
+    expect((await engineer.get(`/api/studies/${study.id}`)).body).toMatchObject({ scenarios: [] });
+  });
+
+  it('refuses a question that PostgreSQL cannot hold, and takes one of several lines', async () => {
+    for (const question of ['a\u0000b', 'a\u0007b']) {
+      const answer = await engineer.post('/api/studies').send({ name: 'Creamery', question }).expect(400);
+      expect(problemSchema.parse(answer.body).errors?.map(({ path }) => path)).toEqual(['question']);
+    }
+    await engineer.post('/api/studies').send({ name: 'Creamery', question: 'One\n\ttwo' }).expect(201);
   });
 
   it("hides a student's sandbox from colleagues, not from administrators, and keeps shared studies from students", async () => {

@@ -34,7 +34,6 @@ export const RunRow = defineEntity({
     requestedBy: p.manyToOne(User).ref(),
     createdAt: createdAtProperty(),
     startedAt: p.datetime(3).nullable(),
-    /** Last sign of life of the worker, for the reconciler. */
     finishedAt: p.datetime(3).nullable(),
     engineMs: p.double().$type<number>().nullable(),
   },

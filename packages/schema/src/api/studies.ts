@@ -3,7 +3,12 @@ import { scenarioSchema } from '../scenario/scenario.js';
 import { idSchema, instantSchema, nameSchema } from './common.js';
 import { runSchema } from './runs.js';
 
-const questionSchema = z.string().trim().max(500);
+/** A few lines of text; PostgreSQL holds no NUL, and nobody types other control characters. */
+const questionSchema = z
+  .string()
+  .trim()
+  .max(500)
+  .regex(/^(?:[^\p{Cc}]|[\t\r\n])*$/u, { error: 'a question holds no control characters' });
 
 export const createStudyRequestSchema = z.strictObject({
   name: nameSchema,

@@ -8,7 +8,7 @@ export function readDocument(version: ScenarioVersion): Scenario {
   return scenarioSchema.parse(version.document);
 }
 
-/** Each scenario's newest version. @throws Error where one is missing, which no writer leaves behind */
+/** Each scenario's newest version; none of a scenario that was deleted since it was read. */
 export async function newestVersions(
   em: EntityManager,
   scenarios: readonly ScenarioRow[],
@@ -22,13 +22,13 @@ export async function newestVersions(
   return new Map(versions.map((version) => [version.scenario.id, version]));
 }
 
-/** Scenarios with their newest version and that version's newest run, in the order given. */
+/** Scenarios with their newest version and that version's newest run, in the order given, but those deleted meanwhile. */
 export async function scenarioViews(
   em: EntityManager,
   scenarios: readonly ScenarioRow[],
 ): Promise<ScenarioView[]> {
-  if (scenarios.length === 0) return [];
   const versions = await newestVersions(em, scenarios);
+  if (versions.size === 0) return [];
   const versionIds = [...versions.values()].map(({ id }) => id);
   const newest = await em.execute<{ id: string }[]>(
     `select distinct on (scenario_version_id) id from runs
@@ -41,10 +41,9 @@ export async function scenarioViews(
     newest.map(({ id }) => id),
   );
   const runOf = new Map(runs.map((run) => [run.scenarioVersionId, run]));
-  return scenarios.map((scenario) => {
+  return scenarios.flatMap((scenario) => {
     const version = versions.get(scenario.id);
-    if (version === undefined)
-      throw new Error(`Scenario ${scenario.id} has no version ${String(scenario.newestVersion)}.`);
+    if (version === undefined) return [];
     return {
       id: scenario.id,
       studyId: scenario.study.id,

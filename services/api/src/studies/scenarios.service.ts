@@ -1,4 +1,3 @@
-import { LockMode } from '@mikro-orm/core';
 import { EntityManager } from '@mikro-orm/postgresql';
 import { Injectable } from '@nestjs/common';
 import { ScenarioRow, ScenarioVersion, withWorkspace, type Study } from '@noonwell/persistence';
@@ -45,7 +44,6 @@ export class ScenariosService {
     return withWorkspace(this.em, principal.workspaceId, async (em) => {
       const study = await requireStudy(em, principal, studyId, 'write');
       if (content.weatherYearId !== null) await requireWeatherYear(em, content.weatherYearId);
-      await em.lock(study, LockMode.PESSIMISTIC_WRITE);
       const scenario = em.create(ScenarioRow, {
         workspaceId: principal.workspaceId,
         study,
@@ -70,8 +68,6 @@ export class ScenariosService {
     requirePermission(principal, 'sandbox.write');
     return withWorkspace(this.em, principal.workspaceId, async (em) => {
       const { scenario, study } = await requireScenario(em, principal, id, 'write');
-      await em.lock(scenario, LockMode.PESSIMISTIC_WRITE);
-      await em.refresh(scenario);
       if (scenario.newestVersion !== basedOnVersion) {
         throw conflict(
           'version-conflict',
@@ -136,11 +132,7 @@ export class ScenariosService {
     return withWorkspace(this.em, principal.workspaceId, async (em) => {
       const study = await requireStudy(em, principal, studyId, 'write');
       await requireWeatherYear(em, weatherYearId);
-      const scenarios = await em.find(
-        ScenarioRow,
-        { study: study.id },
-        { lockMode: LockMode.PESSIMISTIC_WRITE, orderBy: { id: 'asc' } },
-      );
+      const scenarios = await em.find(ScenarioRow, { study: study.id }, { orderBy: { id: 'asc' } });
       const versions = await newestVersions(em, scenarios);
       for (const scenario of scenarios) {
         const version = versions.get(scenario.id);
@@ -174,7 +166,7 @@ export class ScenariosService {
 
 async function oneView(em: EntityManager, scenario: ScenarioRow): Promise<ScenarioView> {
   const [view] = await scenarioViews(em, [scenario]);
-  if (view === undefined) throw new Error('A scenario has one view.');
+  if (view === undefined) throw notFound('scenario');
   return view;
 }
 

@@ -25,7 +25,8 @@ export function makesSandbox({ role }: Principal): boolean {
 }
 
 /**
- * The study, if the person may do that with it.
+ * The study, if the person may do that with it. Whoever changes a study or anything in it waits here for those who
+ * do so already: what is read afterwards is neither changed nor deleted under one's hands.
  * @throws ProblemException 404 where they may not see it, 403 where they may only read it
  */
 export async function requireStudy(
@@ -34,6 +35,7 @@ export async function requireStudy(
   id: string,
   wanted: 'read' | 'write',
 ): Promise<Study> {
+  if (wanted === 'write') await em.execute('select 1 from studies where id = ? for no key update', [id]);
   const study = await em.findOne(
     Study,
     { $and: [{ id }, visibleStudies(principal)] },
@@ -58,7 +60,10 @@ export async function requireScenario(
   const scenario = await em.findOne(ScenarioRow, { id });
   if (scenario === null) throw notFound('scenario');
   try {
-    return { scenario, study: await requireStudy(em, principal, scenario.study.id, wanted) };
+    const study = await requireStudy(em, principal, scenario.study.id, wanted);
+    // Saved or deleted by whoever was waited for.
+    if (wanted === 'write' && (await em.refresh(scenario)) === null) throw notFound('scenario');
+    return { scenario, study };
   } catch (error) {
     // A hidden study's scenario must not be told apart from one that does not exist.
     if (error instanceof ProblemException && error.getStatus() === 404) throw notFound('scenario');
