@@ -98,6 +98,19 @@ describe('runs', () => {
     expect(await messages(runs.map((run) => run.id))).toHaveLength(runs.length);
   });
 
+  it('is one run however its id is written, also where it goes to the queue again', async () => {
+    const run = await startOne();
+    const shouted = run.id.toUpperCase();
+    await engineer.post(`/api/runs/${shouted}/cancel`).expect(200);
+    await engineer.post(`/api/runs/${shouted}/retry`).expect(200);
+    const payloads = await queryAsAdmin(
+      test.database,
+      "select payload->>'runId' as id from outbox where run_id = $1",
+      [run.id],
+    );
+    expect(payloads).toEqual([{ id: run.id }, { id: run.id }]);
+  });
+
   it('starts the named scenarios only, and computes nothing twice', async () => {
     const { id, scenarios } = await study();
     const [, cell] = scenarios;

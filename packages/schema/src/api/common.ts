@@ -1,6 +1,7 @@
 import { z } from 'zod';
 
-export const idSchema = z.uuid();
+/** In lower case, as PostgreSQL gives it back: two writings of one id must not look like two. */
+export const idSchema = z.uuid().toLowerCase();
 export const instantSchema = z.iso.datetime();
 /** A name that a person types: trimmed, one line, no control characters. */
 export const nameSchema = z
