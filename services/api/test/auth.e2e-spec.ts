@@ -128,13 +128,27 @@ describe('sign-in and sessions', () => {
 
   it('ends a session that was idle or open too long', async () => {
     for (const column of ['expires_at', 'family_expires_at']) {
-      const { cookie } = await open();
+      const { cookie, access } = await open();
       await queryAsAdmin(
         test.database,
         `update refresh_tokens set ${column} = now() - interval '1 second' where used_at is null`,
       );
       await refresh(cookie).expect(401);
+      // What was signed before lives its ten minutes at the longest, and not beyond the absolute limit.
+      await me(access).expect(column === 'family_expires_at' ? 401 : 200);
     }
+  });
+
+  it('keeps the cookie of a session that could not be renewed because of a fault of ours', async () => {
+    const { cookie } = await open();
+    await queryAsAdmin(test.database, 'alter table memberships rename to memberships_hidden');
+    try {
+      const answer = await refresh(cookie).expect(500);
+      expect(cookies(answer)).toEqual([]);
+    } finally {
+      await queryAsAdmin(test.database, 'alter table memberships_hidden rename to memberships');
+    }
+    await refresh(cookie).expect(200);
   });
 
   it('lets a disabled account neither in nor go on', async () => {

@@ -16,7 +16,7 @@ import { CurrentPrincipal, type Principal } from '../access/principal';
 import { requireSameSite } from '../access/same-site';
 import { InjectSettings, type Settings } from '../config/settings';
 import { LimitByAddress, LimitSignIn } from '../http/limits';
-import { unauthorized } from '../http/problem';
+import { ProblemException, unauthorized } from '../http/problem';
 import { AccountsService, type Account } from './accounts.service';
 import { PasswordGuard } from './local.strategy';
 import { clearRefreshCookie, readRefreshCookie, setRefreshCookie } from './refresh-cookie';
@@ -80,7 +80,8 @@ export class AuthController {
       setRefreshCookie(response, this.settings, session);
       return session.access;
     } catch (error) {
-      clearRefreshCookie(response, this.settings);
+      // A fault of ours, the database being away, is no reason to end the session.
+      if (error instanceof ProblemException) clearRefreshCookie(response, this.settings);
       throw error;
     }
   }

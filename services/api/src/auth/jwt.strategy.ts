@@ -28,7 +28,12 @@ export class JwtStrategy extends PassportStrategy(Strategy, 'jwt') {
     if (!claims.success) throw unauthorized('This access token is not of this version. Sign in again.');
     const { sub: userId, workspace: workspaceId, family: familyId, role } = claims.data;
     return withScope(this.em, { userId, workspaceId }, async (em) => {
-      const open = await em.count(RefreshToken, { familyId, userId, revokedAt: null });
+      const open = await em.count(RefreshToken, {
+        familyId,
+        userId,
+        revokedAt: null,
+        familyExpiresAt: { $gt: new Date() },
+      });
       const membership = await em.findOne(Membership, { user: userId }, { populate: ['user'] });
       const workspace = await em.findOne(Workspace, { id: workspaceId });
       if (open === 0 || membership === null || workspace === null || membership.user.$.disabledAt !== null) {
