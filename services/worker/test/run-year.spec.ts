@@ -102,8 +102,8 @@ describe('a run', () => {
 
   it('is tried again after a fault of our own, and then fails with an honest sentence', async () => {
     gate.open('fault');
-    const { runId } = await stage.queueRun();
     const arrived = gate.arrived;
+    const { runId } = await stage.queueRun();
     const failed = await stage.until(runId, (row) => row.state === 'failed');
     expect(gate.arrived - arrived).toBe(3);
     expect(failed.failure).toContain('broke off 3 times for a reason inside Noonwell');

@@ -99,18 +99,18 @@ export class RunThreads {
   }
 
   private start(): Worker {
-    return new Worker(this.entry.file, { resourceLimits: RESOURCE_LIMITS, ...this.entry.options });
+    const thread = new Worker(this.entry.file, { resourceLimits: RESOURCE_LIMITS, ...this.entry.options });
+    // Also while it is idle: an error that nobody listens to would end the process.
+    for (const end of ['error', 'exit'])
+      thread.on(end, () => {
+        this.forget(thread);
+      });
+    return thread;
   }
 
   private keep(thread: Worker): void {
     // An idle thread keeps no process alive.
     thread.unref();
-    thread.once('error', () => {
-      this.forget(thread);
-    });
-    thread.once('exit', () => {
-      this.forget(thread);
-    });
     this.idle.push(thread);
   }
 
