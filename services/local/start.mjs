@@ -61,10 +61,19 @@ async function main() {
     process.on(signal, (name) => void onSignal(name));
 
   await ensurePackages();
-  const { database, secrets, stop } = await openDatabase(data);
-  undo.push(stop);
+  const opening = openDatabase(data);
+  // Also what a signal finds half opened: else it would be left running.
+  undo.push(() =>
+    opening.then(
+      ({ stop }) => stop(),
+      () => undefined,
+    ),
+  );
+  const { database, secrets } = await opening;
   await ensureBuilt();
   await migrateAndSeed(database, secrets, port);
+  // A signal that came in between stops what there was; nothing must be started behind its back.
+  if (stopping) return;
   const note = () => {
     writeRunFile(data, { pid: process.pid, address, parts: parts.flatMap(({ child }) => child.pid ?? []) });
   };

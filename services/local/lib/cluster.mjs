@@ -56,7 +56,13 @@ export async function startOwnPostgres(data, secrets, secretsFresh) {
       return { port: running, stop };
     }
     const port = await freePort();
-    await startCluster({ dir, port });
+    try {
+      await startCluster({ dir, port });
+    } catch (error) {
+      // Ctrl-C ends the program that starts the server, and perhaps not the server.
+      await stopCluster(dir);
+      throw error;
+    }
     note(where(port));
     return { port, stop };
   });

@@ -71,10 +71,14 @@ export async function ensureGivenRoles(databaseUrl, ownerUrl, secrets) {
  */
 async function ensureRole(query, name, password) {
   const found = await query('SELECT 1 FROM pg_roles WHERE rolname = $1', [name]);
-  const verb = found.length === 0 ? 'CREATE' : 'ALTER';
-  await query(
-    `${verb} ROLE ${name} LOGIN NOSUPERUSER NOCREATEDB NOCREATEROLE NOBYPASSRLS PASSWORD '${password}'`,
-  );
+  if (found.length === 0) {
+    await query(
+      `CREATE ROLE ${name} LOGIN NOSUPERUSER NOCREATEDB NOCREATEROLE NOBYPASSRLS PASSWORD '${password}'`,
+    );
+  } else {
+    // Only a superuser may name the other rights of a role that is there; the migration looks at them.
+    await query(`ALTER ROLE ${name} LOGIN PASSWORD '${password}'`);
+  }
 }
 
 /**

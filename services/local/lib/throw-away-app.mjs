@@ -17,8 +17,14 @@ export async function startThrowAwayApp() {
   chmodSync(data, 0o711);
   const port = await freePort();
   const address = `http://127.0.0.1:${String(port)}`;
-  // Never a database of somebody else's.
-  const env = { ...process.env, DATABASE_URL: undefined, DATABASE_OWNER_URL: undefined };
+  // Never a server of somebody else's, and always with the demo.
+  const env = {
+    ...process.env,
+    DATABASE_URL: undefined,
+    DATABASE_OWNER_URL: undefined,
+    REDIS_URL: undefined,
+    NOONWELL_DEMO: undefined,
+  };
   const child = spawn(
     process.execPath,
     [join(root, 'services/local/start.mjs'), '--port', String(port), '--data', data],
