@@ -1,9 +1,12 @@
 /** A worker process that takes a job, says so and never finishes it: for being killed. */
 import process from 'node:process';
 import { Worker } from 'bullmq';
-import { chooseQueueBackend, queueSettingsFrom } from '../src/queue/index.js';
+import { chooseQueueBackend } from '../src/queue/index.js';
 
-const { connection } = chooseQueueBackend(queueSettingsFrom(process.env));
+const { connection } = chooseQueueBackend({
+  databaseUrl: process.env['DATABASE_URL'] ?? '',
+  redisUrl: process.env['REDIS_URL'],
+});
 const worker = new Worker(
   process.env['TEST_QUEUE'] ?? '',
   async (job) => {

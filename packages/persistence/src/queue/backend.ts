@@ -35,12 +35,3 @@ export function chooseQueueBackend(settings: QueueSettings): QueueBackend {
   setDefaultBackendFactory(createPostgresBackend);
   return { name: 'postgres', connection: { connectionString: settings.databaseUrl, max: SESSIONS } };
 }
-
-/** The queue settings of a service, from its environment. @throws Error when DATABASE_URL is missing */
-export function queueSettingsFrom(environment: Readonly<Record<string, string | undefined>>): QueueSettings {
-  const databaseUrl = environment['DATABASE_URL'];
-  if (databaseUrl === undefined || databaseUrl === '') {
-    throw new Error('DATABASE_URL is not set: give the address of the database as the app role.');
-  }
-  return { databaseUrl, redisUrl: environment['REDIS_URL'] };
-}

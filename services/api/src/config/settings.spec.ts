@@ -17,7 +17,11 @@ describe('readSettings', () => {
   });
 
   it('keeps the demo off a network unless it is asked for', () => {
-    expect(readSettings(PRODUCTION).demo).toBe(true);
+    expect(readSettings({ DATABASE_URL }).demo).toBe(true);
+    expect(readSettings({ DATABASE_URL, HOST: '0.0.0.0' }).demo).toBe(false);
+    // A proxy on the same machine may stand in front.
+    expect(readSettings(PRODUCTION).demo).toBe(false);
+    expect(readSettings({ ...PRODUCTION, NOONWELL_DEMO: 'on' }).demo).toBe(true);
     expect(readSettings({ ...PRODUCTION, HOST: '0.0.0.0' }).demo).toBe(false);
     expect(readSettings({ ...PRODUCTION, HOST: '0.0.0.0', NOONWELL_DEMO: 'on' }).demo).toBe(true);
     expect(readSettings({ ...PRODUCTION, NOONWELL_DEMO: 'off' }).demo).toBe(false);
@@ -27,6 +31,7 @@ describe('readSettings', () => {
   it('sends cookies over TLS only, but for loopback where there is none', () => {
     expect(readSettings({ ...PRODUCTION, HOST: '0.0.0.0' }).secureCookies).toBe(true);
     expect(readSettings(PRODUCTION).secureCookies).toBe(false);
+    expect(readSettings({ ...PRODUCTION, NOONWELL_TRUSTED_PROXIES: '1' }).secureCookies).toBe(true);
     expect(readSettings({ ...PRODUCTION, NOONWELL_SECURE_COOKIES: 'on' }).secureCookies).toBe(true);
   });
 

@@ -16,7 +16,6 @@ const environmentSchema = z.object({
     protocol: /^postgres(ql)?$/,
     error: 'must be a postgresql:// address, as the app role',
   }),
-  REDIS_URL: z.string().optional(),
   HOST: z.string().min(1).default('127.0.0.1'),
   PORT: z.coerce.number().int().min(0).max(65_535).default(4300),
   LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
@@ -33,9 +32,7 @@ const environmentSchema = z.object({
 });
 
 export interface Settings {
-  readonly production: boolean;
   readonly databaseUrl: string;
-  readonly redisUrl: string | undefined;
   readonly host: string;
   readonly port: number;
   readonly logLevel: z.infer<typeof environmentSchema>['LOG_LEVEL'];
@@ -72,19 +69,20 @@ export function readSettings(environment: Readonly<Record<string, string | undef
   const production = env.NODE_ENV === 'production';
   const local = isLoopback(env.HOST);
   return {
-    production,
     databaseUrl: env.DATABASE_URL,
-    redisUrl: env.REDIS_URL,
     host: env.HOST,
     port: env.PORT,
     logLevel: env.LOG_LEVEL,
     jwtSecret: jwtSecret(env.NOONWELL_JWT_SECRET, env.NOONWELL_SECRETS_FILE, production),
-    // Sign-in without a password must not reach a network because somebody forgot to switch it off.
-    demo: env.NOONWELL_DEMO === undefined ? local : env.NOONWELL_DEMO === 'on',
+    // Sign-in without a password must not reach a network, directly or through a proxy on this machine, because
+    // somebody forgot to switch it off.
+    demo: env.NOONWELL_DEMO === undefined ? local && !production : env.NOONWELL_DEMO === 'on',
     webDist: env.NOONWELL_WEB_DIST,
-    // Browsers take Secure cookies over TLS only; on loopback there is none.
+    // Browsers take Secure cookies over TLS only; on loopback there is none, unless a proxy in front brings it.
     secureCookies:
-      env.NOONWELL_SECURE_COOKIES === undefined ? production && !local : env.NOONWELL_SECURE_COOKIES === 'on',
+      env.NOONWELL_SECURE_COOKIES === undefined
+        ? production && (!local || env.NOONWELL_TRUSTED_PROXIES > 0)
+        : env.NOONWELL_SECURE_COOKIES === 'on',
     trustedProxies: env.NOONWELL_TRUSTED_PROXIES,
     limits: {
       signInsPerAddress: env.NOONWELL_SIGN_INS_PER_ADDRESS,
