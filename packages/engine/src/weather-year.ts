@@ -61,5 +61,7 @@ export const WEATHER_FLAG = {
   pressureFromAltitude: 8,
   clippedIrradiance: 16,
   clippedHumidity: 32,
+  filledIrradiance: 64,
+  filledPressure: 128,
 } as const;
 export type WeatherFlag = keyof typeof WEATHER_FLAG;

@@ -1,6 +1,8 @@
 import { extraterrestrialNormalWm2, type WeatherYear } from '@noonwell/engine';
+import type { TableLabel } from '@noonwell/schema';
 import { standardAltitudeM } from './atmosphere.js';
 import { MONTHS } from './calendar.js';
+import { intervalOfLabel, labelNearest, labelToMiddleMinutes } from './label.js';
 import { isAtSearchEnd, type SunOffset } from './sun-offset.js';
 
 /** Offsets nearer than this to the expected one are the search's own coarseness (own choice). */
@@ -19,25 +21,29 @@ const ZONE_TOLERANCE_HOURS = 2;
 const DAY_MS = 86_400_000;
 
 /** Plain sentences about what looks wrong in a year that can nevertheless be read. Nothing is changed. */
-export function doubts(year: WeatherYear, clock: SunOffset, expectedOffsetMinutes: number): string[] {
+export function doubts(year: WeatherYear, clock: SunOffset, label: TableLabel): string[] {
   return [
-    ...clockDoubts(clock, expectedOffsetMinutes),
+    ...clockDoubts(clock, label, year.intervalMinutes),
     ...altitudeDoubts(year),
     ...beamDoubts(year),
     ...zoneDoubts(year),
   ];
 }
 
-function clockDoubts(clock: SunOffset, expected: number): string[] {
+function clockDoubts(clock: SunOffset, label: TableLabel, intervalMinutes: number): string[] {
   const { bestMinutes, closureError } = clock;
+  const expected = labelToMiddleMinutes(label, intervalMinutes);
   if (bestMinutes === null || closureError === null) {
     return ['There are too few sunny hours to check the clock against the sun.'];
   }
   const found: string[] = [];
   if (Math.abs(bestMinutes - expected) >= CLOCK_TOLERANCE_MINUTES) {
     const beyond = isAtSearchEnd(bestMinutes) ? ' or beyond' : '';
+    const other = labelNearest(bestMinutes, intervalMinutes, CLOCK_TOLERANCE_MINUTES);
+    const instead =
+      other === null ? '' : ` It would fit means over ${intervalOfLabel(other, intervalMinutes)}.`;
     found.push(
-      `The irradiance fits the sun best ${signed(bestMinutes)} min from the label${beyond}; means over the hour that ends at the label fit at ${signed(expected)} min. ` +
+      `The irradiance fits the sun best ${signed(bestMinutes)} min from the label${beyond}; means over ${intervalOfLabel(label, intervalMinutes)} fit at ${signed(expected)} min.${instead} ` +
         `The records may be ${describeShift(bestMinutes - expected)}, or the time zone or longitude is wrong. The year is used as it stands.`,
     );
   }
@@ -64,6 +70,7 @@ function describeShift(minutes: number): string {
 }
 
 function signed(minutes: number): string {
+  if (minutes === 0) return '0';
   return minutes < 0 ? `−${-minutes}` : `+${minutes}`;
 }
 

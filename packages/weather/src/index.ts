@@ -10,5 +10,10 @@ export { readWeatherFile, WEATHER_READERS, type WeatherReader } from './read.js'
 export type * from './result.js';
 export { findSunOffset, type SunOffset } from './sun-offset.js';
 export { summariseWeather } from './summary.js';
+export { CHANNEL_NAMES } from './table/channels.js';
+export type { MissingStatement } from './table/complete.js';
+export type { ColumnGuess } from './table/guess.js';
+export { inspectTable, type FoundColumn, type TableInspection } from './table/inspect.js';
+export { readTable } from './table/read.js';
 export { generateSyntheticYear } from './synthetic/generate.js';
 export { syntheticPlaceSchema, type SyntheticPlace } from './synthetic/place.js';

@@ -41,11 +41,14 @@ function shorten(value: string): string {
 
 /** One plain sentence or two: "Line 12, column 14 (global horizontal radiation): -3 is negative. …". */
 export function describeProblem(problem: WeatherProblem): string {
+  const sentence = `${problem.reason} ${problem.fix}`.trim();
+  // A part of what is stated beside the file has a name but no line.
+  if (problem.line === null && problem.column === null) {
+    return problem.columnName === null ? sentence : `${problem.columnName}: ${sentence}`;
+  }
   const place: string[] = [];
   if (problem.line !== null) place.push(`line ${problem.line}`);
   if (problem.column !== null) place.push(`column ${problem.column}`);
   const where = place.join(', ') + (problem.columnName === null ? '' : ` (${problem.columnName})`);
-  const sentence = `${problem.reason} ${problem.fix}`.trim();
-  if (where.trim() === '') return sentence;
   return `${where.charAt(0).toUpperCase()}${where.slice(1)}: ${sentence}`.trim();
 }

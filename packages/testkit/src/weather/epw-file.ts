@@ -1,21 +1,18 @@
 import type { WeatherYear } from '@noonwell/engine';
 import { writeEpw } from '@noonwell/weather';
 import { applyDefect, type EpwDefect } from './defects.js';
+import { fileOfLines, type TextFileOptions } from './text.js';
 
-export interface EpwFileOptions {
+export interface EpwFileOptions extends TextFileOptions {
   readonly city?: string;
   readonly region?: string;
   readonly country?: string;
   readonly source?: string;
   readonly wmo?: string;
   readonly comment?: string;
-  readonly lineEnd?: 'lf' | 'crlf' | 'cr';
-  readonly encoding?: 'utf8' | 'utf8-bom' | 'latin1';
   /** Applied in this order. */
   readonly defects?: readonly EpwDefect[];
 }
-
-const LINE_ENDS = { lf: '\n', crlf: '\r\n', cr: '\r' } as const;
 
 /** An EPW file as bytes, sound or with the damage asked for. */
 export function epwFile(year: WeatherYear, options: EpwFileOptions = {}): Uint8Array<ArrayBuffer> {
@@ -30,14 +27,8 @@ export function epwFile(year: WeatherYear, options: EpwFileOptions = {}): Uint8A
   const text = writeEpw(year, { header: { city, region, country, source, wmo }, comment });
   let lines = text.trimEnd().split('\n');
   for (const defect of options.defects ?? []) lines = applyDefect(lines, defect);
-  const lineEnd = LINE_ENDS[options.lineEnd ?? 'lf'];
   const isCut = options.defects?.some(({ kind }) => kind === 'truncated') ?? false;
-  return encode(lines.join(lineEnd) + (isCut ? '' : lineEnd), options.encoding ?? 'utf8');
-}
-
-function encode(text: string, encoding: NonNullable<EpwFileOptions['encoding']>): Uint8Array<ArrayBuffer> {
-  if (encoding === 'latin1') return Uint8Array.from(text, (character) => character.charCodeAt(0));
-  return new TextEncoder().encode(encoding === 'utf8-bom' ? `\uFEFF${text}` : text);
+  return fileOfLines(lines, options, isCut);
 }
 
 /** A file of a given size whose beginning is a sound EPW file: 65 MiB of it are too many. */

@@ -16,8 +16,8 @@ import { findMissingHours, slotsOfYear } from './year.js';
 export const EPW_FORMAT = 'epw';
 export type EpwResult = WeatherReadResult;
 
-/** Records are means over the hour that ends at the label, so the sun belongs half an hour before it. */
-const LABEL_TO_MIDPOINT_MINUTES = -30;
+/** Records are means over the hour that ends at the label. */
+const LABEL = 'end';
 
 /** Reads an EPW file given as text. Never throws on bad content: it comes back refused, with places and reasons. */
 export function readEpwText(text: string, options: WeatherReadOptions = {}): EpwResult {
@@ -32,7 +32,7 @@ export function readEpwText(text: string, options: WeatherReadOptions = {}): Epw
   const notes: string[] = [];
   const year = buildYear(header, rows, slots, notes, problems);
   if (problems.count > 0) return refused(problems);
-  const clock = findSunOffset(year, 'end');
+  const clock = findSunOffset(year, LABEL);
   options.onProgress?.(1);
   return {
     kind: 'accepted',
@@ -40,8 +40,9 @@ export function readEpwText(text: string, options: WeatherReadOptions = {}): Epw
     year,
     header: header.header,
     summary: summariseWeather(year),
+    statement: null,
     sunOffsetMinutes: clock.bestMinutes,
-    warnings: [...notes, ...doubts(year, clock, LABEL_TO_MIDPOINT_MINUTES)],
+    warnings: [...notes, ...doubts(year, clock, LABEL)],
   };
 }
 
