@@ -42,11 +42,16 @@ export function scenarioHelp(): string {
   --receiver KIND    what stands at the focus; ${RECEIVER_KINDS[0]} without it
 
 Fields of a scenario (a field of one variant is read only where that variant is chosen):
-${table(scenarioFields().map((field) => [field.path, unitText(field.unit), rangeText(field), field.label]))}`;
+${table(
+  scenarioFields()
+    .flatMap((field) => [field, ...(field.columns ?? [])])
+    .map((field) => [field.path, unitText(field.unit), rangeText(field), field.label]),
+)}`;
 }
 
 function rangeText(field: ScenarioField): string {
   if (field.choices !== undefined) return Object.keys(field.choices).join(' | ');
+  if (field.mostRows !== undefined) return `0 to ${field.mostRows} rows`;
   if (field.min !== undefined && field.max !== undefined) return `${field.min} to ${field.max}`;
   return '';
 }

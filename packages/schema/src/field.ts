@@ -18,6 +18,8 @@ export interface FieldMeta {
   /** Lowest and highest value of a number field (of each entry, for a list of numbers). */
   readonly min?: number;
   readonly max?: number;
+  /** Most rows of a table of any length. */
+  readonly mostRows?: number;
   /** Labels of a choice field's values. */
   readonly choices?: Readonly<Record<string, string>>;
 }

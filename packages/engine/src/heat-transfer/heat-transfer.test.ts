@@ -4,6 +4,7 @@ import { DomainError } from '../errors.js';
 import { documentedExamples, evaluateExample } from '../../validation/documented-examples.js';
 import { propertyRuns } from '../../validation/property-runs.js';
 import * as air from './air.js';
+import { buriedPipeConductanceWmK } from './buried-pipe.js';
 import { counterFlowEffectiveness } from './epsilon-ntu.js';
 import { flatFaceConvectionWm2K } from './flat-face-losses.js';
 import * as natural from './flat-natural-convection.js';
@@ -20,6 +21,7 @@ describe('documented examples', () => {
   const scope = {
     ...air,
     ...natural,
+    buriedPipeConductanceWmK,
     counterFlowEffectiveness,
     flatFaceConvectionWm2K,
     flatWindConvectionWm2K,

@@ -21,6 +21,12 @@ export const LEDGER_LINES = [
   { key: 'windStow', label: 'Not collected: stowed for wind', parts: { dish: 'out' } },
   { key: 'outOfTravel', label: "Not collected: sun outside the tracker's travel", parts: { dish: 'out' } },
   {
+    key: 'belowHorizonProfile',
+    label: 'Not collected: sun behind the horizon profile',
+    parts: { dish: 'out' },
+  },
+  { key: 'outOfService', label: 'Not collected: scheduled outage', parts: { dish: 'out' } },
+  {
     key: 'defocusedStoreFull',
     label: 'Not collected: off the sun, store full (or water too hot at full flow)',
     parts: { dish: 'out' },

@@ -2,17 +2,9 @@ import { requireRange } from '../errors.js';
 import { solveIncreasing, type IncreasingProblem } from '../numeric/solve-increasing.js';
 import type { Receiver, ReceiverStep } from '../receivers/receiver.js';
 import { waterDensityKgM3, waterEnthalpyJkg } from '../water/water.js';
+import type { PipeSettings } from './pipe-registry.js';
+import type { PipeSurroundings } from './pipe-surroundings.js';
 import { Pipe } from './pipe.js';
-
-export interface PipeSettings {
-  /** Exposed pipe one way [m]. */
-  readonly lengthM: number;
-  readonly boreM: number;
-  readonly wallM: number;
-  readonly insulationM: number;
-  readonly insulationConductivityWmK: number;
-  readonly outsideFilmWm2K: number;
-}
 
 export interface LoopSettings {
   /** Temperature held where the water leaves the receiver [°C]. */
@@ -43,6 +35,7 @@ const SET_POINT_TOLERANCE_K = 1e-4;
 export class Loop implements IncreasingProblem {
   readonly toReceiver: Pipe;
   readonly toTank: Pipe;
+  private outsidePipesC: number;
   private running = false;
   private lastFlowKgS: number;
   private bottomC = 0;
@@ -59,13 +52,23 @@ export class Loop implements IncreasingProblem {
     private readonly settings: LoopSettings,
     private readonly receiver: Receiver,
     private readonly step: ReceiverStep,
+    private readonly surroundings: PipeSurroundings,
     initialC: number,
   ) {
     requireRange('least flow [kg/s]', settings.minFlowKgS, 1e-6, settings.maxFlowKgS);
     requireRange('pump efficiency', settings.pumpEfficiency, 1e-3, 1);
-    this.toReceiver = new Pipe(settings.pipe, initialC);
-    this.toTank = new Pipe(settings.pipe, initialC);
+    this.toReceiver = new Pipe(settings.pipe, surroundings, initialC);
+    this.toTank = new Pipe(settings.pipe, surroundings, initialC);
+    this.outsidePipesC = initialC;
     this.lastFlowKgS = settings.minFlowKgS;
+  }
+
+  /**
+   * Takes the temperature around the pipes for the record whose weather stands in the receiver's step.
+   * @param day - of the year at the middle of the record, from 1, with its fraction
+   */
+  beginRecord(day: number): void {
+    this.outsidePipesC = this.surroundings.outsideC(this.step.airC, day);
   }
 
   /**
@@ -88,7 +91,7 @@ export class Loop implements IncreasingProblem {
     }
     // A receiver left hotter than the loop may get (after a stop in full sun) is not flooded while it cools.
     if (!lit && this.outletOverLimit) this.outletAtC(0);
-    this.toTank.solve(this.flowKgS, waterEnthalpyJkg(this.step.outletC), this.step.airC, this.step.dtS);
+    this.toTank.solve(this.flowKgS, waterEnthalpyJkg(this.step.outletC), this.outsidePipesC, this.step.dtS);
     this.enthalpyRiseJkg = this.flowKgS > 0 ? this.toTank.outletJkg - this.bottomJkg : 0;
     this.heatToStoreW = this.flowKgS * this.enthalpyRiseJkg;
     this.pumpW = this.pumpPowerW();
@@ -128,7 +131,7 @@ export class Loop implements IncreasingProblem {
 
   private outletAtC(flowKgS: number): number {
     this.flowKgS = flowKgS;
-    this.toReceiver.solve(flowKgS, this.bottomJkg, this.step.airC, this.step.dtS);
+    this.toReceiver.solve(flowKgS, this.bottomJkg, this.outsidePipesC, this.step.dtS);
     this.step.flowKgS = flowKgS;
     this.step.inletC = this.toReceiver.outletC;
     this.receiver.solve(this.step);

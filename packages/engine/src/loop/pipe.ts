@@ -1,9 +1,8 @@
 import { requireRange } from '../errors.js';
-import { pipeConductanceWmK } from '../heat-transfer/pipe-insulation.js';
 import { HIGHEST_C, LOWEST_C } from '../receivers/face.js';
 import { solveIncreasing, type IncreasingProblem } from '../numeric/solve-increasing.js';
 import { waterDensityKgM3, waterEnthalpyJkg, waterHeatCapacityJkgK } from '../water/water.js';
-import type { PipeSettings } from './loop.js';
+import type { PipeSizes, PipeSurroundings } from './pipe-surroundings.js';
 
 /** Heat capacity of copper by volume [J/(m³·K)]: 8960 kg/m³ × 385 J/(kg·K). Source: CRC Handbook, value from memory. */
 const COPPER_JM3K = 8960 * 385;
@@ -15,11 +14,11 @@ const FILLING_C = 20;
 const TOLERANCE_W = 1e-9;
 
 /**
- * One run of exposed pipe, wall and water as one mixed node, implicit in time. What it holds at night it
- * loses, and the morning pays for it.
+ * One run of pipe, wall and water as one mixed node, implicit in time. What it holds at night it loses, and the
+ * morning pays for it. Insulation and ground around it hold no heat here.
  */
 export class Pipe implements IncreasingProblem {
-  /** Conductance to the air [W/K]. */
+  /** Conductance to what stands around it [W/K]. */
   readonly uaWK: number;
   private readonly waterKg: number;
   private readonly wallJK: number;
@@ -28,7 +27,7 @@ export class Pipe implements IncreasingProblem {
 
   private flowKgS = 0;
   private inletJkg = 0;
-  private airC = 0;
+  private outsideC = 0;
   private dtS = 1;
   private heldJ = 0;
 
@@ -38,9 +37,9 @@ export class Pipe implements IncreasingProblem {
   lossW = 0;
   storedW = 0;
 
-  constructor(settings: PipeSettings, initialC: number) {
+  constructor(settings: PipeSizes, surroundings: PipeSurroundings, initialC: number) {
     requireRange('pipe length [m]', settings.lengthM, 0, 1e5);
-    this.uaWK = settings.lengthM * pipeConductanceWmK(settings);
+    this.uaWK = settings.lengthM * surroundings.conductanceWmK;
     const boreAreaM2 = (Math.PI * settings.boreM ** 2) / 4;
     const wallAreaM2 = Math.PI * settings.wallM * (settings.boreM + settings.wallM);
     this.waterKg = waterDensityKgM3(FILLING_C) * boreAreaM2 * settings.lengthM;
@@ -54,10 +53,10 @@ export class Pipe implements IncreasingProblem {
   }
 
   /** Tries one step with `flowKgS` of water entering at `inletJkg`; the pipe itself changes on `commit`. */
-  solve(flowKgS: number, inletJkg: number, airC: number, dtS: number): void {
+  solve(flowKgS: number, inletJkg: number, outsideC: number, dtS: number): void {
     this.flowKgS = flowKgS;
     this.inletJkg = inletJkg;
-    this.airC = airC;
+    this.outsideC = outsideC;
     this.dtS = dtS;
     this.heldJ = this.energyJ(this.temperatureC);
     const capacityJkgK = waterHeatCapacityJkgK(this.temperatureC);
@@ -68,7 +67,7 @@ export class Pipe implements IncreasingProblem {
 
   residual(temperatureC: number): number {
     this.outletJkg = waterEnthalpyJkg(temperatureC);
-    this.lossW = this.uaWK * (temperatureC - this.airC);
+    this.lossW = this.uaWK * (temperatureC - this.outsideC);
     this.storedW = (this.energyJ(temperatureC) - this.heldJ) / this.dtS;
     return this.storedW + this.lossW + this.flowKgS * (this.outletJkg - this.inletJkg);
   }

@@ -2,6 +2,8 @@ import { beforeAll, describe, expect, it } from 'vitest';
 import { CELL_MACHINE, COIL_MACHINE } from '../../validation/simulate/machines.js';
 import { madeWeather } from '../../validation/simulate/made-weather.js';
 import { DomainError, RunError } from '../errors.js';
+import type { BuriedPipeSettings } from '../loop/buried-pipe.js';
+import type { Machine } from '../machine.js';
 import { ACCOUNTS, ACCOUNT_INDEX, type Account } from '../ledger/accounts.js';
 import { partResidual } from '../ledger/balance.js';
 import { LEDGER_INDEX, LEDGER_LINES, LEDGER_PARTS } from '../ledger/lines.js';
@@ -162,6 +164,89 @@ describe('what decides the result', () => {
     expect(of(user, 'gridExport')).toBeLessThan(of(seller, 'gridExport'));
     expect(of(user, 'ownUse')).toBeGreaterThan(of(seller, 'ownUse'));
     expect(of(user, 'powerDc')).toBe(of(seller, 'powerDc'));
+  });
+});
+
+describe('the place', () => {
+  const days = 20;
+  const place = (horizon: Machine['place']['horizon']): Machine => ({ ...COIL_MACHINE, place: { horizon } });
+
+  it('behind a wall of 90° all round collects nothing: its whole daytime beam stands in that line', () => {
+    const walled = runYear(place([{ azimuthRad: 0, elevationRad: Math.PI / 2 }]), madeWeather({ days }));
+    expect(walled.trackerSeconds.tracking).toBe(0);
+    expect(of(walled, 'belowHorizonProfile')).toBe(of(walled, 'beamOnAperture'));
+    expect(of(walled, 'absorbed')).toBe(0);
+  });
+
+  it('costs the mornings, not the evenings, with a hill in the east', () => {
+    const east = [
+      { azimuthRad: 0.3, elevationRad: 0 },
+      { azimuthRad: Math.PI / 2, elevationRad: 0.5 },
+      { azimuthRad: 3, elevationRad: 0 },
+    ];
+    const open = runYear(COIL_MACHINE, madeWeather({ days }));
+    const hilly = runYear(place(east), madeWeather({ days }));
+    const lost = (result: RunResult, from: number, to: number) =>
+      result.hourly.powersW.belowHorizonProfile
+        .filter((_, record) => record % 24 >= from && record % 24 < to)
+        .reduce((sum, power) => sum + power, 0);
+    expect(lost(open, 0, 24)).toBe(0);
+    expect(lost(hilly, 0, 12)).toBeGreaterThan(0);
+    expect(lost(hilly, 12, 24)).toBe(0);
+    expect(of(hilly, 'heatToFluid')).toBeLessThan(of(open, 'heatToFluid'));
+  });
+});
+
+describe('a scheduled outage', () => {
+  it('of five days counts five times 24 hours and their beam, and nothing else moves', () => {
+    const outages = [{ from: { month: 1, day: 4 }, to: { month: 1, day: 8 } }];
+    const made = madeWeather({ days: 20 });
+    const result = runYear({ ...COIL_MACHINE, outages }, made);
+    expect(result.trackerSeconds.outOfService).toBe(5 * 86_400);
+    const beamJm2 = made.dniWm2.slice(3 * 24, 8 * 24).reduce((sum, dni) => sum + dni * 3600, 0);
+    expect(of(result, 'outOfService') / (beamJm2 * result.apertureAreaM2)).toBeCloseTo(1, 12);
+    expect(result.hourly.states.trackingShare.slice(3 * 24, 8 * 24).every((share) => share === 0)).toBe(true);
+    const whole = runYear(COIL_MACHINE, madeWeather({ days: 20 }));
+    expect(result.hourly.powersW.absorbed.slice(0, 3 * 24)).toEqual(
+      whole.hourly.powersW.absorbed.slice(0, 3 * 24),
+    );
+  });
+
+  it('of the whole year leaves the load to the boiler', () => {
+    const outages = [{ from: { month: 1, day: 1 }, to: { month: 12, day: 31 } }];
+    const result = runYear({ ...COIL_MACHINE, outages }, madeWeather({ days: 10 }));
+    expect(of(result, 'outOfService')).toBe(of(result, 'beamOnAperture'));
+    expect(result.trackerSeconds.outOfService).toBe(10 * 86_400);
+    expect(of(result, 'heatToFluid')).toBeLessThanOrEqual(0);
+  });
+});
+
+describe('buried pipe', () => {
+  const pipe: BuriedPipeSettings = {
+    kind: 'buried',
+    lengthM: 30,
+    boreM: 0.02,
+    wallM: 0.001,
+    insulationM: 0.03,
+    insulationConductivityWmK: 0.04,
+    depthM: 0.8,
+    soilConductivityWmK: 1.5,
+    soilDiffusivityM2S: 6e-7,
+  };
+  const buried = { ...COIL_MACHINE, loop: { ...COIL_MACHINE.loop, pipe } };
+
+  it('balances over the year and never freezes in ground that does not', () => {
+    const cold = madeWeather({ meanC: 8 });
+    const result = runYear(buried, cold);
+    for (const part of LEDGER_PARTS)
+      expect(Math.abs(partResidual(part, result.accountsJ)), part).toBeLessThan(
+        1e-9 * of(result, 'beamOnAperture'),
+      );
+    expect(of(result, 'supplyPipeLoss')).toBeGreaterThan(0);
+    expect(result.pipeFreezeSeconds).toBe(0);
+    const open = { ...COIL_MACHINE.loop.pipe, lengthM: 30 };
+    const exposed = runYear({ ...COIL_MACHINE, loop: { ...COIL_MACHINE.loop, pipe: open } }, cold);
+    expect(exposed.pipeFreezeSeconds).toBeGreaterThan(0);
   });
 });
 

@@ -6,17 +6,21 @@ import { RESIDUAL_LIMIT, ROUND_OFF, findImbalance, findImbalances } from '../led
 import { LEDGER_INDEX } from '../ledger/lines.js';
 import type { Load } from '../load/load.js';
 import { createLoad } from '../load/registry.js';
+import { dayAtMiddle } from '../ground/surface-wave.js';
 import { Loop } from '../loop/loop.js';
+import { createPipeSurroundings } from '../loop/pipe-registry.js';
 import type { Machine } from '../machine.js';
 import { createMains } from '../mains/burch-christensen.js';
 import { MODEL_VERSION } from '../model-version.js';
 import { apertureAreaM2, rimAngleRad } from '../optics/dish.js';
+import { HorizonProfile } from '../place/horizon.js';
 import { createReceiverStep, type Receiver } from '../receivers/receiver.js';
 import { createReceiver } from '../receivers/registry.js';
 import { createTank, createTankStep, type Tank } from '../store/stratified-tank.js';
 import { emptySunPosition, sunPosition, type SunPosition } from '../sun/position.js';
 import { spreadBeam } from '../sun/sunlit-substeps.js';
 import { TRACKER_STATES, TRACKER_STATE_INDEX } from '../tracker/states.js';
+import { outageRecords } from '../tracker/outage.js';
 import { createTracker, type Tracker } from '../tracker/tracker.js';
 import type { WeatherYear } from '../weather-year.js';
 import { requireWeather, stepsPerRecord } from './check-input.js';
@@ -71,6 +75,7 @@ class Simulation implements YearRun {
   private readonly apertureM2: number;
   private readonly calendar: RecordCalendar;
   private readonly tracker: Tracker;
+  private readonly outage: Uint8Array;
   private readonly receiver: Receiver;
   private readonly receiverStep = createReceiverStep();
   private readonly dishLedger: DishLedger;
@@ -104,13 +109,25 @@ class Simulation implements YearRun {
     this.steps = stepsPerRecord(machine, weather);
     this.apertureM2 = apertureAreaM2(machine.dish);
     this.calendar = recordCalendar(weather);
-    this.tracker = createTracker(machine.tracker, weather.latitudeDeg * DEG);
+    this.tracker = createTracker(
+      machine.tracker,
+      weather.latitudeDeg * DEG,
+      new HorizonProfile(machine.place.horizon),
+    );
+    this.outage = outageRecords(machine.outages, weather.startLocalMs);
 
     const airC = weather.dryBulbC[0]!;
     this.receiver = createReceiver(machine.receiver, machine.dish, airC);
     this.receiverStep.faceC = airC;
     this.dishLedger = new DishLedger(machine.dish, this.receiver.optics);
-    this.loop = new Loop(machine.loop, this.receiver, this.receiverStep, airC);
+    const aroundPipes = createPipeSurroundings(machine.loop.pipe, weather);
+    this.loop = new Loop(
+      machine.loop,
+      this.receiver,
+      this.receiverStep,
+      aroundPipes,
+      aroundPipes.outsideC(airC, this.dayOf(0)),
+    );
     this.tank = createTank(machine.tank, machine.store.initialC);
     this.layerKg = this.tank.massKg / this.tank.layers;
     this.tankEnergyJ = this.tank.energyJ();
@@ -147,12 +164,17 @@ class Simulation implements YearRun {
     receiverStep.windMs = weather.windMs[record]!;
     receiverStep.pressurePa = weather.pressurePa[record]!;
     tankStep.surroundingsC = weather.dryBulbC[record]!;
+    this.loop.beginRecord(this.dayOf(record));
     this.load.ask(record, tankStep);
     this.placeSun(record);
     this.watch.beginRecord();
 
     for (let step = 0; step < this.steps; step++) this.runStep(record, step);
     this.endRecord(record);
+  }
+
+  private dayOf(record: number): number {
+    return dayAtMiddle(this.weather.startLocalMs[record]!, this.weather.intervalMinutes);
   }
 
   /** Sun and beam of each sub-step: a sunrise's beam belongs to the sunlit part of its record. */
@@ -184,7 +206,13 @@ class Simulation implements YearRun {
     const dniWm2 = this.stepDniWm2[step]!;
     const beamW = dniWm2 * this.apertureM2;
     receiverStep.dtS = this.machine.stepS;
-    const mounted = this.tracker.decide(sun, dniWm2, receiverStep.windMs, receiverStep.dtS);
+    const mounted = this.tracker.decide(
+      sun,
+      dniWm2,
+      receiverStep.windMs,
+      receiverStep.dtS,
+      this.outage[record] === 0,
+    );
     let state = this.collect(mounted, sun, beamW);
     const parts = Math.max(1, Math.ceil((this.loop.flowKgS * receiverStep.dtS) / this.layerKg));
     const dtS = receiverStep.dtS / parts;

@@ -9,6 +9,8 @@
  * - `outOfTravel`: the sun stands where the mount cannot point.
  * - `defocusedStoreFull`, `defocusedReceiverLimit`: off the sun because the heat is not wanted, or a part of
  *   the receiver is at its limit. Decided by the simulation from the store and the receiver, after the tracker.
+ * - `belowHorizonProfile`: the sun is up, but behind the profile of the place.
+ * - `outOfService`: a scheduled outage, by day and by night.
  */
 export const TRACKER_STATES = [
   'nightPark',
@@ -18,6 +20,8 @@ export const TRACKER_STATES = [
   'outOfTravel',
   'defocusedStoreFull',
   'defocusedReceiverLimit',
+  'belowHorizonProfile',
+  'outOfService',
 ] as const;
 
 export type TrackerState = (typeof TRACKER_STATES)[number];

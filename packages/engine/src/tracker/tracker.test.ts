@@ -4,11 +4,18 @@ import { propertyRuns } from '../../validation/property-runs.js';
 import { DomainError } from '../errors.js';
 import type { SunPosition } from '../sun/position.js';
 import { TRACKER_STATE_INDEX, TRACKER_STATES, type TrackerState } from './states.js';
-import { createTracker, type Tracker, type TrackerSettings } from './tracker.js';
+import { HorizonProfile, type HorizonPoint } from '../place/horizon.js';
+import { createTracker as createWithHorizon, type Tracker, type TrackerSettings } from './tracker.js';
 
 const RAD = Math.PI / 180;
 const NORTH = 40 * RAD;
 const SOUTH = -35 * RAD;
+
+const createTracker = (
+  wanted: TrackerSettings,
+  latitudeRad: number,
+  horizon: readonly HorizonPoint[] = [],
+): Tracker => createWithHorizon(wanted, latitudeRad, new HorizonProfile(horizon));
 
 const settings = (change: Partial<TrackerSettings> = {}): TrackerSettings => ({
   azimuthSpanRad: 250 * RAD,
@@ -31,13 +38,14 @@ const HIGH = sunAt(50, 180);
 
 const stateOf = (
   tracker: Tracker,
-  { sun = HIGH, dniWm2 = 800, windMs = 3, dtS = 300 }: Partial<Step> = {},
-): TrackerState => TRACKER_STATES[tracker.decide(sun, dniWm2, windMs, dtS)]!;
+  { sun = HIGH, dniWm2 = 800, windMs = 3, dtS = 300, inService = true }: Partial<Step> = {},
+): TrackerState => TRACKER_STATES[tracker.decide(sun, dniWm2, windMs, dtS, inService)]!;
 interface Step {
   sun: SunPosition;
   dniWm2: number;
   windMs: number;
   dtS: number;
+  inService: boolean;
 }
 const statesInWind = (tracker: Tracker, winds: readonly number[], dtS = 300): TrackerState[] =>
   winds.map((windMs) => stateOf(tracker, { windMs, dtS }));
@@ -151,8 +159,50 @@ describe('wind', () => {
   });
 });
 
+describe('horizon profile', () => {
+  const hill = [
+    { azimuthRad: 90 * RAD, elevationRad: 0 },
+    { azimuthRad: 120 * RAD, elevationRad: 20 * RAD },
+    { azimuthRad: 150 * RAD, elevationRad: 0 },
+  ];
+
+  it('hides the sun behind it, and only there', () => {
+    const tracker = createTracker(settings(), NORTH, hill);
+    expect(stateOf(tracker, { sun: sunAt(19.9, 120) })).toBe('belowHorizonProfile');
+    expect(stateOf(tracker, { sun: sunAt(20.1, 120) })).toBe('tracking');
+    expect(stateOf(tracker, { sun: sunAt(9.9, 105) })).toBe('belowHorizonProfile');
+    expect(stateOf(tracker, { sun: sunAt(10.1, 105) })).toBe('tracking');
+    expect(stateOf(tracker, { sun: sunAt(9.9, 200) })).toBe('tracking');
+  });
+
+  it('leaves a level horizon as it was: the sun at 0° is night, just above it is not hidden', () => {
+    const level = [{ azimuthRad: 0, elevationRad: 0 }];
+    const tracker = createTracker(settings({ elevationMinRad: 0 }), NORTH, level);
+    expect(stateOf(tracker, { sun: sunAt(0, 180) })).toBe('nightPark');
+    expect(stateOf(tracker, { sun: sunAt(0.001, 180) })).toBe('tracking');
+  });
+});
+
+describe('scheduled outage', () => {
+  it('is out of service by day and by night, and remembers the storm that blew meanwhile', () => {
+    const tracker = createTracker(settings(), NORTH);
+    expect(stateOf(tracker, { inService: false })).toBe('outOfService');
+    expect(stateOf(tracker, { inService: false, sun: sunAt(-5, 0), windMs: 20 })).toBe('outOfService');
+    expect(stateOf(tracker)).toBe('windStow');
+  });
+});
+
 describe('order of the states', () => {
-  it('is night park, wind stow, out of travel, waiting, tracking', () => {
+  it('is out of service, night park, below the profile, wind stow, out of travel, waiting, tracking', () => {
+    const walled = createTracker(settings(), NORTH, [{ azimuthRad: 0, elevationRad: 3 * RAD }]);
+    const calmless = { windMs: 20, dniWm2: 0 };
+    expect(stateOf(walled, { ...calmless, sun: sunAt(-1, 0), inService: false })).toBe('outOfService');
+    expect(stateOf(walled, { ...calmless, sun: sunAt(-1, 0) })).toBe('nightPark');
+    expect(stateOf(walled, { ...calmless, sun: sunAt(2, 0) })).toBe('belowHorizonProfile');
+    expect(stateOf(walled, { ...calmless, sun: sunAt(4, 0) })).toBe('windStow');
+  });
+
+  it('is night park, wind stow, out of travel, waiting, tracking under a level horizon', () => {
     const tracker = createTracker(settings({ resumeAfterS: 0 }), NORTH);
     const storm = 20;
     expect(stateOf(tracker, { sun: sunAt(0, 0), windMs: storm, dniWm2: 0 })).toBe('nightPark');
@@ -168,19 +218,23 @@ describe('order of the states', () => {
       azimuthDeg: fc.double({ min: 0, max: 360, noNaN: true, maxExcluded: true }),
       dniWm2: fc.double({ min: 0, max: 1200, noNaN: true }),
       windMs: fc.double({ min: 0, max: 30, noNaN: true }),
+      inService: fc.boolean(),
     });
     fc.assert(
       fc.property(fc.array(step, { minLength: 1, maxLength: 200 }), (steps) => {
-        const tracker = createTracker(settings(), SOUTH);
+        const tracker = createTracker(settings(), SOUTH, [{ azimuthRad: 1, elevationRad: 0.2 }]);
         const hours = new Float64Array(TRACKER_STATES.length);
         let mayCatch = 0;
-        for (const { elevationDeg, azimuthDeg, dniWm2, windMs } of steps) {
-          const state = tracker.decide(sunAt(elevationDeg, azimuthDeg), dniWm2, windMs, 300);
+        let outOfService = 0;
+        for (const { elevationDeg, azimuthDeg, dniWm2, windMs, inService } of steps) {
+          const state = tracker.decide(sunAt(elevationDeg, azimuthDeg), dniWm2, windMs, 300, inService);
           hours[state]! += 1;
-          if (elevationDeg > 5 && dniWm2 >= 100 && windMs < 13) mayCatch++;
+          if (inService && elevationDeg > 0.2 / RAD && dniWm2 >= 100 && windMs < 13) mayCatch++;
+          if (!inService) outOfService++;
         }
         expect(hours.reduce((sum, count) => sum + count, 0)).toBe(steps.length);
         expect(hours[TRACKER_STATE_INDEX.tracking]!).toBeLessThanOrEqual(mayCatch);
+        expect(hours[TRACKER_STATE_INDEX.outOfService]).toBe(outOfService);
         expect(hours[TRACKER_STATE_INDEX.defocusedStoreFull]).toBe(0);
         expect(hours[TRACKER_STATE_INDEX.defocusedReceiverLimit]).toBe(0);
       }),

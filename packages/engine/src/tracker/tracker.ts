@@ -1,4 +1,5 @@
 import { requireRange } from '../errors.js';
+import type { HorizonProfile } from '../place/horizon.js';
 import type { SunPosition } from '../sun/position.js';
 import { azimuthFromEquatorRad } from './azimuth.js';
 import { TRACKER_STATE_INDEX } from './states.js';
@@ -30,17 +31,19 @@ export interface Tracker {
   /**
    * The state of the sub-step that now begins.
    *
-   * The first that holds: night park, wind stow, out of travel, waiting, tracking. The wind is watched by
-   * night too, so that a stormy dawn finds the dish stowed. Call once a sub-step, in order of time.
+   * The first that holds: out of service, night park, below the horizon profile, wind stow, out of travel,
+   * waiting, tracking. The wind is watched by night and in an outage too, so that a stormy dawn finds the dish
+   * stowed. Call once a sub-step, in order of time.
    *
    * @param sun - position at the middle of the sub-step
    * @param dniWm2 - beam normal irradiance [W/m², ≥ 0]
    * @param windMs - mean wind speed [m/s, ≥ 0]
    * @param dtS - length of the sub-step [s, > 0]
+   * @param inService - false in a scheduled outage
    * @returns index into `TRACKER_STATES`; never a defocus state
    * @throws DomainError for a wind, beam or length that is negative or not a number
    */
-  decide(sun: Readonly<SunPosition>, dniWm2: number, windMs: number, dtS: number): number;
+  decide(sun: Readonly<SunPosition>, dniWm2: number, windMs: number, dtS: number, inService: boolean): number;
 }
 
 /**
@@ -52,15 +55,20 @@ export interface Tracker {
  *
  * @param settings - travel and rules
  * @param latitudeRad - of the site, north positive [rad, −π/2 to π/2]: says which way the equator lies
+ * @param horizon - what hides the sun around the dish
  * @returns the tracker
  * @throws DomainError naming the setting that is out of range
  *
  * Source: travel, thresholds and hold as stated in the settings; defaults are common practice, no source.
  */
-export function createTracker(settings: TrackerSettings, latitudeRad: number): Tracker {
+export function createTracker(
+  settings: TrackerSettings,
+  latitudeRad: number,
+  horizon: HorizonProfile,
+): Tracker {
   requireTrackerSettings(settings);
   requireRange('latitude [rad]', latitudeRad, -Math.PI / 2, Math.PI / 2);
-  return new AzimuthElevationTracker(settings, latitudeRad);
+  return new AzimuthElevationTracker(settings, latitudeRad, horizon);
 }
 
 class AzimuthElevationTracker implements Tracker {
@@ -70,14 +78,25 @@ class AzimuthElevationTracker implements Tracker {
   constructor(
     private readonly settings: TrackerSettings,
     private readonly latitudeRad: number,
+    private readonly horizon: HorizonProfile,
   ) {}
 
-  decide(sun: Readonly<SunPosition>, dniWm2: number, windMs: number, dtS: number): number {
+  decide(
+    sun: Readonly<SunPosition>,
+    dniWm2: number,
+    windMs: number,
+    dtS: number,
+    inService: boolean,
+  ): number {
     requireRange('beam normal irradiance [W/m²]', dniWm2, 0, Number.MAX_VALUE);
     requireRange('wind speed [m/s]', windMs, 0, Number.MAX_VALUE);
     requireRange('sub-step [s]', dtS, Number.MIN_VALUE, Number.MAX_VALUE);
     this.watchWind(windMs, dtS);
+    if (!inService) return TRACKER_STATE_INDEX.outOfService;
     if (!(sun.elevationRad > 0)) return TRACKER_STATE_INDEX.nightPark;
+    // The sun's apparent place, because that is what a surveyed profile hides.
+    if (sun.elevationRad <= this.horizon.elevationRad(sun.azimuthRad))
+      return TRACKER_STATE_INDEX.belowHorizonProfile;
     if (this.stowed) return TRACKER_STATE_INDEX.windStow;
     if (!this.canPointAt(sun)) return TRACKER_STATE_INDEX.outOfTravel;
     if (dniWm2 < this.settings.startDniWm2) return TRACKER_STATE_INDEX.waiting;

@@ -6,6 +6,8 @@ const EVERY_MONTH = Array<number>(12).fill(1);
 
 /** A dish with coil, loop, tank and morning load, for runs in tests. */
 export const COIL_MACHINE: Machine = {
+  place: { horizon: [] },
+  outages: [],
   dish: BENCH_DISH,
   tracker: {
     azimuthSpanRad: (250 * Math.PI) / 180,
@@ -29,6 +31,7 @@ export const COIL_MACHINE: Machine = {
     pressureDropPa: 60_000,
     pumpEfficiency: 0.25,
     pipe: {
+      kind: 'exposed',
       lengthM: 8,
       boreM: 0.02,
       wallM: 0.001,

@@ -16,7 +16,9 @@ export function referenceMarkdown(): string {
     '',
     '| field | label | unit | range | default | only when | help | source |',
     '| --- | --- | --- | --- | --- | --- | --- | --- |',
-    ...scenarioFields().map(fieldRow),
+    ...scenarioFields()
+      .flatMap((field) => [field, ...(field.columns ?? [])])
+      .map(fieldRow),
     '',
     '## Figures of a summary',
     '',
@@ -40,14 +42,25 @@ function row(cells: readonly string[]): string {
 }
 
 function fieldRow(field: ScenarioField): string {
-  const range = field.choices ? Object.keys(field.choices).join(', ') : `${field.min} to ${field.max}`;
+  const range = rangeText(field);
   const when = field.when
     .map(({ path, value }) => `${path.split('.').slice(-2).join('.')} = ${value}`)
     .join(', ');
   const standard = Array.isArray(field.defaultValue)
-    ? field.defaultValue.join(' ')
+    ? field.defaultValue.join(' ') || 'none'
     : String(field.defaultValue);
   return row([`\`${field.path}\``, field.label, field.unit, range, standard, when, field.help, field.source]);
+}
+
+function rangeText(field: ScenarioField): string {
+  switch (field.kind) {
+    case 'table':
+      return `0 to ${field.mostRows} rows`;
+    case 'monthDay':
+      return '01-01 to 12-31';
+    default:
+      return field.choices ? Object.keys(field.choices).join(', ') : `${field.min} to ${field.max}`;
+  }
 }
 
 function summaryRows(shape: z.ZodObject, path: string): string[] {

@@ -1,4 +1,5 @@
 import { loadDefinition } from './loads/index.js';
+import { pipeProblems } from './pipes/index.js';
 import type { CrossFieldProblem } from './problem.js';
 import { receiverDefinition } from './receivers/index.js';
 import type { Scenario } from './scenario.js';
@@ -11,8 +12,21 @@ export function crossFieldProblems(scenario: Scenario): CrossFieldProblem[] {
     if (!holds) problems.push({ path, message });
   };
   const { dish, tracker, receiver } = scenario.catch;
-  const { pump, tank } = scenario.carryAndKeep;
+  const { pump, pipe, tank } = scenario.carryAndKeep;
+  const { horizon } = scenario.place;
 
+  const directions = new Map<number, number>();
+  horizon.forEach(({ azimuthDeg }, index) => {
+    const direction = azimuthDeg % 360;
+    const before = directions.get(direction);
+    rule(
+      before === undefined,
+      `place.horizon.${index}.azimuthDeg`,
+      `This direction stands already in pair ${(before ?? 0) + 1}${azimuthDeg === 360 ? ' (360° is 0°)' : ''}: keep one of the two`,
+    );
+    if (before === undefined) directions.set(direction, index);
+  });
+  problems.push(...pipeProblems(pipe));
   problems.push(...receiverDefinition(receiver.kind).problems(receiver, dish.apertureDiameterM));
   rule(
     tracker.elevationMinDeg < tracker.elevationMaxDeg,

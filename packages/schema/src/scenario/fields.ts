@@ -6,9 +6,11 @@ import { scenarioShape } from './scenario.js';
 export interface ScenarioField extends FieldMeta {
   /** Keys joined by dots: "catch.dish.apertureDiameterM", "use.loads.0.setPointC". */
   readonly path: string;
-  readonly kind: 'number' | 'integer' | 'numberList' | 'choice' | 'numberChoice';
+  readonly kind: 'number' | 'integer' | 'numberList' | 'choice' | 'numberChoice' | 'table' | 'monthDay';
   /** For a list of numbers. */
   readonly length?: number;
+  /** Of a table, in the order of its columns; their paths stand in its first row. */
+  readonly columns?: readonly ScenarioField[];
   /** Shown only while each of these choices has the value given. */
   readonly when: readonly { readonly path: string; readonly value: string }[];
 }
@@ -18,11 +20,18 @@ export function scenarioFields(): readonly ScenarioField[] {
   return ALL_FIELDS;
 }
 
+/** A field, or a column of a table, by its path in any row. */
 export function scenarioField(path: string): ScenarioField | undefined {
-  return ALL_FIELDS.find((field) => field.path === path);
+  return BY_PATH.get(path.replace(/\.\d+\./g, '.0.'));
 }
 
 const ALL_FIELDS: readonly ScenarioField[] = collect(scenarioShape, '', []);
+/** Variants share paths; the first one that has a field speaks for it. */
+const BY_PATH = new Map(
+  ALL_FIELDS.flatMap((field) => [field, ...(field.columns ?? [])])
+    .map((field) => [field.path, field] as const)
+    .toReversed(),
+);
 
 function collect(schema: z.core.$ZodType, path: string, when: ScenarioField['when']): ScenarioField[] {
   const meta = fieldRegistry.get(schema);
@@ -45,8 +54,11 @@ function collect(schema: z.core.$ZodType, path: string, when: ScenarioField['whe
   }
   if (schema instanceof z.ZodArray && !meta) return collect(schema.element, `${path}.0`, when);
   if (!meta) return [];
+  if (schema instanceof z.ZodArray && schema.element instanceof z.ZodObject)
+    return [{ ...meta, path, kind: 'table', columns: collect(schema.element, `${path}.0`, when), when }];
   if (schema instanceof z.ZodArray)
     return [{ ...meta, path, kind: 'numberList', length: listLength(meta), when }];
+  if (schema instanceof z.ZodString) return [{ ...meta, path, kind: 'monthDay', when }];
   if (schema instanceof z.ZodEnum) return [{ ...meta, path, kind: 'choice', when }];
   if (schema instanceof z.ZodLiteral) return [{ ...meta, path, kind: 'numberChoice', when }];
   return [

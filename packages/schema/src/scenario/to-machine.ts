@@ -1,5 +1,7 @@
 import { JOULES_PER_KWH, type Machine } from '@noonwell/engine';
 import { loadDefinition } from './loads/index.js';
+import { readMonthDay } from './outages.js';
+import { toPipeSettings } from './pipes/index.js';
 import { receiverDefinition } from './receivers/index.js';
 import type { Scenario } from './scenario.js';
 import { toSchedule } from './schedule.js';
@@ -8,11 +10,18 @@ const DEG = Math.PI / 180;
 
 /** From the scenario's units to the engine's: SI, radians, °C. The only place where they are converted. */
 export function toMachine(scenario: Scenario): Machine {
-  const { dish, tracker, receiver } = scenario.catch;
+  const { dish, tracker, outages, receiver } = scenario.catch;
   const { pump, pipe, tank } = scenario.carryAndKeep;
   const [load] = scenario.use.loads;
   if (!load) throw new TypeError('a scenario has one load');
   return {
+    place: {
+      horizon: scenario.place.horizon.map(({ azimuthDeg, elevationDeg }) => ({
+        azimuthRad: azimuthDeg * DEG,
+        elevationRad: elevationDeg * DEG,
+      })),
+    },
+    outages: outages.map(({ from, to }) => ({ from: monthDay(from), to: monthDay(to) })),
     dish: {
       apertureDiameterM: dish.apertureDiameterM,
       focalRatio: dish.focalRatio,
@@ -45,14 +54,7 @@ export function toMachine(scenario: Scenario): Machine {
       stopDifferenceK: pump.stopDifferenceK,
       pressureDropPa: pump.pressureDropKpa * 1000,
       pumpEfficiency: pump.efficiency,
-      pipe: {
-        lengthM: pipe.lengthM,
-        boreM: pipe.boreMm / 1000,
-        wallM: pipe.wallMm / 1000,
-        insulationM: pipe.insulationMm / 1000,
-        insulationConductivityWmK: pipe.insulationConductivityWmK,
-        outsideFilmWm2K: pipe.outsideFilmWm2K,
-      },
+      pipe: toPipeSettings(pipe),
     },
     tank: {
       volumeM3: tank.volumeM3,
@@ -75,4 +77,10 @@ export function toMachine(scenario: Scenario): Machine {
     },
     stepS: scenario.simulation.stepMinutes * 60,
   };
+}
+
+function monthDay(text: string) {
+  const day = readMonthDay(text);
+  if (!day) throw new TypeError(`no day ${text}`);
+  return day;
 }

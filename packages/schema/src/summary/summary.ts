@@ -1,4 +1,10 @@
-import { LEDGER_LINES, LEDGER_PARTS, TRACKER_STATES, type LedgerLine } from '@noonwell/engine';
+import {
+  LEDGER_LINES,
+  LEDGER_PARTS,
+  TRACKER_STATES,
+  type LedgerLine,
+  type TrackerState,
+} from '@noonwell/engine';
 import { z } from 'zod';
 
 export const SUMMARY_FORMAT = 'noonwell-summary';
@@ -10,6 +16,15 @@ function figure(unit: string, description: string) {
 }
 
 const keysOf = <const Key extends string>(keys: readonly Key[]) => z.enum(keys);
+/**
+ * States, and their lines of the ledger, that the engine has learned since summaries were first stored: one
+ * written before spent no time and lost no beam in them.
+ */
+const LATER_STATES = ['belowHorizonProfile', 'outOfService'] as const satisfies readonly (TrackerState &
+  LedgerLine)[];
+const ZEROS = Object.fromEntries(LATER_STATES.map((state) => [state, 0]));
+const withLater = (value: unknown): unknown =>
+  typeof value === 'object' && value !== null ? { ...ZEROS, ...value } : value;
 const lineKeys = LEDGER_LINES.map((line): LedgerLine => line.key);
 const monthly = (unit: string, description: string) =>
   z
@@ -64,7 +79,7 @@ export const runSummarySchema = z.object({
   pumpHours: figure('h', 'Hours with the pump running'),
   pipeFreezeHours: figure('h', 'Hours with water in a pipe below 0 °C: a plain-water loop would freeze'),
   trackerHours: z
-    .record(keysOf(TRACKER_STATES), z.number())
+    .preprocess(withLater, z.record(keysOf(TRACKER_STATES), z.number()))
     .meta({ unit: 'h', description: 'Hours in each state of the tracker' }),
   monthly: z.object({
     beamOnApertureKwh: monthly('kWh', 'Beam on the gross aperture'),
@@ -77,7 +92,7 @@ export const runSummarySchema = z.object({
   }),
   ledger: z.object({
     lines: z
-      .record(keysOf(lineKeys), z.number())
+      .preprocess(withLater, z.record(keysOf(lineKeys), z.number()))
       .meta({ unit: 'kWh', description: 'Every line of the ledger over the year' }),
     partResiduals: z
       .record(keysOf(LEDGER_PARTS), z.number())

@@ -102,5 +102,8 @@ function OneField(props: { field: ScenarioField; readOnly: boolean }) {
     case 'choice':
     case 'numberChoice':
       return <ChoiceField {...props} />;
+    case 'table':
+    case 'monthDay':
+      return null;
   }
 }

@@ -7,6 +7,16 @@ describe('a scenario as typed text', () => {
     expect(fromDraft(toDraft(newScenario(kind)))).toEqual(newScenario(kind));
   });
 
+  it('keeps a horizon profile and outages, numbers as numbers and days as text', () => {
+    const scenario = newScenario('coil');
+    scenario.place.horizon = [
+      { azimuthDeg: 90, elevationDeg: 12.5 },
+      { azimuthDeg: 270, elevationDeg: 3 },
+    ];
+    scenario.catch.outages = [{ from: '03-01', to: '03-14' }];
+    expect(fromDraft(toDraft(scenario))).toEqual(scenario);
+  });
+
   it('leaves text that is no number to the schema, which names field and unit', () => {
     const draft = toDraft(newScenario('coil'));
     const parsed = parseScenario(fromDraft(withText(draft, 'five')));

@@ -1,15 +1,20 @@
-import { defaultVariant, scenarioFields, type Scenario, type ScenarioField } from '@noonwell/schema';
+import {
+  defaultVariant,
+  scenarioField,
+  scenarioFields,
+  type Scenario,
+  type ScenarioField,
+} from '@noonwell/schema';
 
 /** A branch of the document while it is edited: numbers are the text that was typed. */
 export type DraftValue = string | DraftValue[] | { [key: string]: DraftValue };
 export type Draft = Record<string, DraftValue>;
 
-const NUMERIC = new Set<ScenarioField['kind']>(['number', 'integer', 'numberList', 'numberChoice']);
-const NUMERIC_PATHS = new Set(
-  scenarioFields()
-    .filter(({ kind }) => NUMERIC.has(kind))
-    .map(({ path }) => path),
-);
+const NUMERIC: ReadonlySet<ScenarioField['kind'] | undefined> = new Set<ScenarioField['kind']>([
+  'number',
+  'integer',
+  'numberChoice',
+]);
 
 /** The document as text, ready for the form. */
 export function toDraft(document: Scenario): Draft {
@@ -53,7 +58,9 @@ function isNumeric(path: readonly string[]): boolean {
   const joined = path.join('.');
   // Format version is the document's own and no field of the form; entries of a list stand one key below it.
   return (
-    joined === 'formatVersion' || NUMERIC_PATHS.has(joined) || NUMERIC_PATHS.has(path.slice(0, -1).join('.'))
+    joined === 'formatVersion' ||
+    NUMERIC.has(scenarioField(joined)?.kind) ||
+    scenarioField(path.slice(0, -1).join('.'))?.kind === 'numberList'
   );
 }
 

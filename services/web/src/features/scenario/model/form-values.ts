@@ -16,15 +16,12 @@ export type SavedValues = z.output<typeof wanted>;
 /** From typed text to what is saved, by the schema that the server checks again. */
 export const formSchema = z
   .custom<FormValues>()
-  .transform(
-    ({ name, weatherYearId, document }) =>
-      // Unknown until the schema behind has looked at it.
-      ({
-        name,
-        weatherYearId: weatherYearId === '' ? null : weatherYearId,
-        document: fromDraft(document),
-      }) as z.input<typeof wanted>,
-  )
+  .transform(({ name, weatherYearId, document }): z.input<typeof wanted> => ({
+    name,
+    weatherYearId: weatherYearId === '' ? null : weatherYearId,
+    // Unknown until the schema behind has looked at it.
+    document: fromDraft(document),
+  }))
   .pipe(wanted);
 
 export function formValues(scenario: Pick<ScenarioView, 'name' | 'weatherYearId' | 'document'>): FormValues {

@@ -21,8 +21,8 @@ it('shows no heading without a field', () => {
 
 it('groups fields by the part of the machine', () => {
   expect(headings.map(({ groups }) => groups.map(({ label }) => label))).toEqual([
-    ['Simulation'],
-    ['Dish', 'Tracker', 'Receiver'],
+    ['Horizon', 'Simulation'],
+    ['Dish', 'Tracker', 'Outages', 'Receiver'],
     ['Pump', 'Pipe', 'Tank'],
     ['Loads', 'Electricity'],
   ]);
