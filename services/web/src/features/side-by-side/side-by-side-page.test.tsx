@@ -102,12 +102,27 @@ describe('side by side', () => {
     );
   });
 
+  it('says how long the tracker was in each state, and what share of the beam came then', async () => {
+    open([coil(), cell()]);
+    const states = await screen.findByRole('region', { name: /^States of the tracker/ });
+    // 100 of the 1000 kWh of beam are met at night in the fixture's ledger; the rest is met on the sun.
+    expect(within(states).getByRole('row', { name: /^On the sun/ })).toHaveTextContent('090.0090.0');
+    expect(within(states).getByRole('row', { name: /^Sun down, parked/ })).toHaveTextContent('010.0010.0');
+  });
+
   it('puts the chosen baseline, the week and the channels into the address', async () => {
     const { router, user } = open([coil(), cell()]);
     await user.click(await screen.findByRole('radio', { name: 'Cells' }));
     expect(await screen.findByText(/^Against “Cells”/)).toBeInTheDocument();
     await user.selectOptions(await screen.findByLabelText('Week from'), 'March');
+    // The router draws a change of the address when there is time: whoever steps on from a week has seen it.
+    await waitFor(() => {
+      expect(screen.getByLabelText('Week from')).toHaveDisplayValue('March');
+    });
     await user.click(screen.getByRole('button', { name: 'A week later' }));
+    await waitFor(() => {
+      expect(screen.getByLabelText('Day')).toHaveDisplayValue('8');
+    });
     await user.selectOptions(screen.getByLabelText('Look at'), 'Receiver');
     await waitFor(() => {
       const query = new URLSearchParams(router.state.location.search);

@@ -8,6 +8,7 @@ import type { Compared } from './model/compared.js';
 import { ledgerTable, type LedgerGroup } from './model/ledger-table.js';
 import { formatResidual } from './model/residual.js';
 import { ScenarioHeading } from './scenario-heading.js';
+import { TrackerStates } from './tracker-states.js';
 
 const useStyles = makeStyles({
   text: { margin: '0 0 12px', maxWidth: '80ch', color: tokens.colorNeutralForeground2 },
@@ -19,6 +20,7 @@ const useStyles = makeStyles({
     marginTop: '16px',
   },
   all: { maxWidth: '640px' },
+  tracker: { marginTop: '16px' },
 });
 
 const DIRECTION_WORDS: Readonly<Record<LedgerDirection, string>> = {
@@ -68,6 +70,9 @@ export function WhereLost({ scenarios }: { scenarios: readonly Compared[] }) {
           rows={scenarios.map((_, index) => index)}
           rowKey={String}
         />
+      </div>
+      <div className={styles.tracker}>
+        <TrackerStates scenarios={scenarios} />
       </div>
       <div className={styles.parts}>
         {table.groups.map((group) => (
