@@ -5,6 +5,7 @@ import { useWatch } from 'react-hook-form';
 import { ChoiceField } from './fields/choice-field.js';
 import { ListField } from './fields/list-field.js';
 import { NumberField } from './fields/number-field.js';
+import { TableField } from './fields/table-field.js';
 import { LoopAdvice } from './loop-advice.js';
 import { DECIDING_PATHS, isShown } from './model/draft.js';
 import { formPath } from './model/form-values.js';
@@ -103,7 +104,9 @@ function OneField(props: { field: ScenarioField; readOnly: boolean }) {
     case 'numberChoice':
       return <ChoiceField {...props} />;
     case 'table':
+      return <TableField {...props} />;
     case 'monthDay':
+      // Only a column of a table.
       return null;
   }
 }

@@ -23,8 +23,7 @@ import { headingsOf } from './model/headings.js';
 import { problemsByField } from './model/save-problems.js';
 import { SaveBar } from './save-bar.js';
 
-// Tables of any length have no editor yet: they go through the form as they are.
-const HEADINGS = headingsOf(scenarioFields().filter(({ kind }) => kind !== 'table'));
+const HEADINGS = headingsOf(scenarioFields());
 
 const useStyles = makeStyles({
   nav: { display: 'flex', flexWrap: 'wrap', gap: '4px 16px', margin: '0 0 16px' },

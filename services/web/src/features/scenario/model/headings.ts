@@ -13,7 +13,7 @@ export const HEADINGS = [
   {
     key: 'place',
     label: 'Place',
-    purpose: 'Weather year, and how finely it is worked through',
+    purpose: 'Weather year, what stands around the dish, and how finely the year is worked through',
     branches: ['place', 'simulation'],
   },
   { key: 'catch', label: 'Catch', purpose: 'Dish, tracker and receiver', branches: ['catch'] },

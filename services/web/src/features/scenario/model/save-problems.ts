@@ -27,7 +27,10 @@ export function listErrors(errors: unknown, path: readonly string[] = []): Liste
     return [{ path: joined, label: labelOf(joined), message: errors.message }];
   }
   return Object.entries(errors).flatMap(([key, child]: [string, unknown]) =>
-    key === 'ref' || key === 'root' ? [] : listErrors(child, [...path, key]),
+    // Of a table as a whole the form library keeps the error one level down; of the form as a whole, none here.
+    key === 'ref' || (key === 'root' && path.length === 0)
+      ? []
+      : listErrors(child, key === 'root' ? path : [...path, key]),
   );
 }
 
