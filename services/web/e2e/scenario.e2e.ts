@@ -2,7 +2,7 @@ import { parseScenarioText } from '@noonwell/schema';
 import { readFile } from 'node:fs/promises';
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { expectAccessible } from './support/accessibility.js';
+import { expectAccessible, expectNoSidewaysScrolling } from './support/accessibility.js';
 import { openBrowser, plain, visit, type Visit } from './support/browser.js';
 import { BASELINE, openStudy, signInAs } from './support/people.js';
 
@@ -49,6 +49,35 @@ describe('the scenario form', () => {
     await page.getByRole('textbox', { name: 'Side of the square face', exact: true }).fill('0.3');
   });
 
+  it('takes a horizon out of a file and an outage by keyboard, on a narrow screen too', async () => {
+    const { page } = here;
+    await page.setInputFiles('input[type="file"][aria-label="Read a CSV file"]', {
+      name: 'hill.csv',
+      mimeType: 'text/csv',
+      buffer: Buffer.from('azimuth;elevation\n60;3,5\n90;12\n120;2\n'),
+    });
+    await page.getByText('3 pairs read from hill.csv').waitFor();
+    expect(await page.getByRole('textbox', { name: 'Elevation, row 1' }).inputValue()).toBe('3.5');
+    await page
+      .getByRole('group', { name: 'Scheduled outages' })
+      .getByRole('button', { name: 'Add a row' })
+      .focus();
+    await page.keyboard.press('Enter');
+    // The new row has the focus.
+    await page.keyboard.type('03-01');
+    await page.keyboard.press('Tab');
+    await page.keyboard.type('03-14');
+    expect(await page.getByRole('textbox', { name: 'First day, row 1' }).inputValue()).toBe('03-01');
+    expect(await page.getByRole('textbox', { name: 'Last day, row 1' }).inputValue()).toBe('03-14');
+    await page.getByRole('combobox', { name: 'How the pipe is laid' }).selectOption({ label: 'Buried' });
+    await page.getByRole('textbox', { name: 'Depth of the axis', exact: true }).waitFor();
+    const wide = page.viewportSize();
+    await page.setViewportSize({ width: 390, height: 844 });
+    await expectNoSidewaysScrolling(page, 'the form with a horizon');
+    await expectAccessible(page, 'the form with a horizon');
+    if (wide) await page.setViewportSize(wide);
+  });
+
   it('switches the receiver with all of its fields, and saves a new version', async () => {
     const { page } = here;
     await page
@@ -73,6 +102,9 @@ describe('the scenario form', () => {
     ]);
     const parsed = parseScenarioText(await readFile(await download.path(), 'utf8'));
     expect(parsed.ok && parsed.scenario.catch.receiver.kind).toBe('cell');
+    expect(parsed.ok && parsed.scenario.place.horizon).toHaveLength(3);
+    expect(parsed.ok && parsed.scenario.catch.outages).toEqual([{ from: '03-01', to: '03-14' }]);
+    expect(parsed.ok && parsed.scenario.carryAndKeep.pipe.kind).toBe('buried');
   });
 
   it('asks before unsaved changes are lost', async () => {
