@@ -122,7 +122,15 @@ describe('scheduled outages', () => {
   it('saves a range of days, and refuses a day that no year has', async () => {
     const api = open();
     await addRow('outages');
+    await waitFor(() => {
+      expect(cell('First day, row 1')).toHaveFocus();
+    });
     fireEvent.change(cell('First day, row 1'), { target: { value: '03-01' } });
+    expect(cell('Last day, row 1')).not.toHaveAttribute('aria-invalid', 'true');
+    fireEvent.blur(cell('Last day, row 1'));
+    await waitFor(() => {
+      expect(cell('Last day, row 1')).toHaveAttribute('aria-invalid', 'true');
+    });
     fireEvent.change(cell('Last day, row 1'), { target: { value: '02-30' } });
     save();
     const summary = (await screen.findByText(/^Not saved: 1 field needs/)).closest('[role="alert"]');

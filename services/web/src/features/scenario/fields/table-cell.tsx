@@ -18,9 +18,9 @@ interface TableCellProps {
 
 export function TableCell({ name, label, numeric, readOnly, onPaste }: TableCellProps) {
   const styles = useStyles();
-  const { ref, text, setText, onBlur, message } = useText(name);
+  const { ref, text, setText, onBlur, message, untouched } = useText(name);
   return (
-    <Field size="small" {...(message === null ? {} : { validationMessage: message })}>
+    <Field size="small" {...(message === null || untouched ? {} : { validationMessage: message })}>
       <Input
         className={mergeClasses(styles.input, numeric && styles.number)}
         size="small"

@@ -104,13 +104,21 @@ export function TableField({ field, readOnly }: { field: ScenarioField; readOnly
   return (
     <fieldset className={styles.root}>
       <legend className={styles.legend}>
-        <InfoLabel info={`${field.help} Source: ${field.source}`}>{field.label}</InfoLabel>
+        <InfoLabel
+          info={[
+            field.help,
+            ...columns.map(({ label, help }) => `${label}: ${help}`),
+            `Source: ${field.source}`,
+          ].join(' ')}
+        >
+          {field.label}
+        </InfoLabel>
       </legend>
       <p className={styles.hint}>
         {rows.length === 0 && (isHorizon ? 'None: a level horizon. ' : 'None. ')}
-        {columns
-          .map((column) => `${column.label}: ${formatRange(column) ?? 'month-day, 03-01 is 1 March'}`)
-          .join('; ')}
+        {isHorizon
+          ? columns.map((column) => `${column.label}: ${formatRange(column) ?? ''}`).join('; ')
+          : 'Month and day: 03-01 is 1 March'}
         . {`At most ${mostRows} rows`}
         {readOnly ? '.' : '; cells of a spreadsheet can be pasted into any row.'}
       </p>

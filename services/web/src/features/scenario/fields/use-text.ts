@@ -2,7 +2,7 @@ import { useController } from 'react-hook-form';
 
 /** A field of the form as typed text, with its error. */
 export function useText(name: string) {
-  const { field, fieldState } = useController<Record<string, unknown>>({ name });
+  const { field, fieldState, formState } = useController<Record<string, unknown>>({ name });
   const { ref, onBlur, onChange, value } = field;
   return {
     ref,
@@ -12,5 +12,7 @@ export function useText(name: string) {
       onChange(text);
     },
     message: fieldState.error?.message ?? null,
+    /** Nobody has had a chance to fill it in: a row that was just added is not called wrong. */
+    untouched: value === '' && !fieldState.isTouched && !formState.isSubmitted,
   };
 }
